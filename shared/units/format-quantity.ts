@@ -1,0 +1,61 @@
+import { convert, ExactDecimal } from './convert.ts';
+import { parseQuantity } from './parse-quantity.ts';
+import type { ParsedQuantity, QuantityLayout } from './parsed-quantity.ts';
+
+export type FormatOptions = { decimals?: number | undefined; significant?: number | undefined };
+
+/** With nothing printed to imitate: enough for 1 Hz at 100 MHz, few enough to hide a double's last digits. */
+const usualSignificant = 9;
+/** A double carries 15 sure digits; rounding to them first keeps 1.0049999999999999 from losing a tie that it should win. */
+const sureDigits = 15;
+
+const settle = (value: number) => new ExactDecimal(value).toSignificantDigits(sureDigits);
+
+/** `10.7 MHz`: rounded half away from zero, plain digits, the unit spelled as given. */
+export function formatQuantity(value: number, unit: string, options: FormatOptions = {}): string {
+  const digits = formatNumber(value, options);
+  return unit === '' ? digits : `${digits} ${unit}`;
+}
+
+function formatNumber(value: number, { decimals, significant }: FormatOptions): string {
+  if (!Number.isFinite(value)) return String(value);
+  if (decimals !== undefined) return withoutMinusZero(settle(value).toFixed(decimals));
+  const rounded = settle(value).toSignificantDigits(significant ?? usualSignificant);
+  if (significant === undefined || rounded.isZero()) return withoutMinusZero(rounded.toFixed());
+  return withoutMinusZero(rounded.toFixed(Math.max(0, significant - rounded.e - 1)));
+}
+
+/**
+ * Writes a value the way the paper does: its unit and spelling, its number of decimals, its thousands separators,
+ * its bare point (`.455 mc`), its letter code (`4K7`), and everything after the number, tolerance included.
+ */
+export function formatLikePrinted(value: number, unit: string, printedText: string): string {
+  const parsed = parseQuantity(printedText);
+  if (!parsed.ok || !Number.isFinite(value)) return formatQuantity(value, unit);
+  const { layout, unit: printedUnit } = parsed.value;
+  const inPrinted = printedUnit === '' ? { ok: true as const, value } : convert(value, unit, printedUnit);
+  if (!inPrinted.ok) return formatQuantity(value, unit);
+  const number = writeNumber(inPrinted.value, parsed.value);
+  return `${printedText.slice(0, layout.start)}${number}${printedText.slice(layout.end)}`;
+}
+
+function writeNumber(value: number, parsed: ParsedQuantity): string {
+  const fixed = withoutMinusZero(settle(value).toFixed(parsed.decimals));
+  const [, sign = '', whole = '', point = ''] = /^(-?)(\d+)(.*)$/.exec(fixed) ?? [];
+  const { layout, printed } = parsed;
+  const written = printed.slice(layout.start, layout.end);
+  const lead = leadLike(whole, point, layout);
+  if (layout.notation === 'letter') return `${sign}${lead}${/\D/.exec(written)?.[0] ?? ''}${point.slice(1)}`;
+  return `${sign === '' && written.startsWith('+') ? '+' : sign}${lead}${point}`;
+}
+
+function leadLike(whole: string, point: string, { bareDecimalPoint, grouped }: QuantityLayout): string {
+  if (bareDecimalPoint && whole === '0' && point !== '') return '';
+  return grouped ? whole.replace(/\B(?=(\d{3})+$)/g, ',') : whole;
+}
+
+const withoutMinusZero = (digits: string): string => (/^-0(?:\.0*)?$/.test(digits) ? digits.slice(1) : digits);
+
+/** Rounds to printed decimals, half away from zero; for comparing with paper. */
+export const roundToDecimals = (value: number, decimals: number): number =>
+  settle(value).toDecimalPlaces(decimals).toNumber();
