@@ -1,0 +1,51 @@
+import { z } from 'zod';
+import { zone } from '#shared/document/define-block.ts';
+
+/** One recognised word: `text` after repair, `raw` as the engine gave it; box in pixels of the page image as read. */
+export const readingWord = z.object({
+  text: z.string(),
+  raw: z.string(),
+  confidence: z.number(),
+  box: zone,
+  line: z.number().int(),
+  block: z.number().int(),
+});
+export type ReadingWord = z.infer<typeof readingWord>;
+
+export const readingBlock = z.object({ kind: z.string(), box: zone });
+export type ReadingBlock = z.infer<typeof readingBlock>;
+
+const row = z.tuple([z.number(), z.number(), z.number()]);
+/** Takes a point of the page image as read to the source image as delivered: [[a, b, c], [d, e, f]]. */
+export const transform = z.tuple([row, row]);
+export type Transform = z.infer<typeof transform>;
+
+/** What was done to the picture and to the engine for this reading. */
+export const recipe = z.object({
+  engine: z.string(),
+  language: z.string(),
+  segmentation: z.enum(['one-column', 'columns']),
+  dpi: z.number(),
+  skewDegrees: z.number(),
+  rulesRemoved: z.boolean(),
+  flattened: z.boolean(),
+});
+export type Recipe = z.infer<typeof recipe>;
+
+/** The parts of a recipe that an archivist may set by hand; what is left out is decided from the picture. */
+export const recipeWish = recipe
+  .pick({ segmentation: true, skewDegrees: true, rulesRemoved: true, flattened: true })
+  .partial()
+  .extend({ skewDegrees: z.number().min(-45).max(45).optional() });
+export type RecipeWish = z.infer<typeof recipeWish>;
+
+/** One pass of recognition over one page image. `figures` are zones of drawings found in the picture. */
+export type Reading = {
+  recipe: Recipe;
+  confidence: number;
+  width: number;
+  height: number;
+  transform: Transform;
+  words: ReadingWord[];
+  figures: z.infer<typeof zone>[];
+};
