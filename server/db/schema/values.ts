@@ -1,0 +1,35 @@
+import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
+import type { QuantityDefinition } from '#shared/calc/quantity.ts';
+import type { Zone } from '#shared/document/define-block.ts';
+import { manuals } from './manuals.ts';
+
+export const quantities = sqliteTable(
+  'quantities',
+  {
+    id: text().primaryKey(),
+    manualId: text('manual_id')
+      .notNull()
+      .references(() => manuals.id),
+    symbol: text().notNull(),
+    definition: text({ mode: 'json' }).$type<QuantityDefinition>().notNull(),
+    pageId: text('page_id'),
+    zone: text({ mode: 'json' }).$type<Zone>(),
+    createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),
+  },
+  (table) => [uniqueIndex('one_quantity_of_a_symbol').on(table.manualId, table.symbol)],
+);
+
+export const settings = sqliteTable(
+  'settings',
+  {
+    id: text().primaryKey(),
+    manualId: text('manual_id')
+      .notNull()
+      .references(() => manuals.id),
+    name: text().notNull(),
+    inputs: text({ mode: 'json' }).$type<Record<string, number | string>>().notNull(),
+    createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),
+    createdBy: text('created_by').notNull(),
+  },
+  (table) => [index('settings_of_a_manual').on(table.manualId)],
+);

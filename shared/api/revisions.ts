@@ -1,0 +1,59 @@
+import { z } from 'zod';
+import { id, listOf, listQuery, pageParams, time } from './common.ts';
+import { defineEndpoint } from './endpoint.ts';
+import { documentJson } from './pages.ts';
+
+export const revisionOrigins = ['machine', 'person'] as const;
+
+export const revisionSummary = z.object({
+  number: z.number().int(),
+  origin: z.enum(revisionOrigins),
+  author: z.string(),
+  note: z.string(),
+  savedAt: time,
+  doubtCount: z.number().int(),
+});
+export type RevisionSummary = z.infer<typeof revisionSummary>;
+
+export const revision = revisionSummary.extend({ pageId: id, document: documentJson });
+const oneParams = pageParams.extend({ number: z.coerce.number().int().positive() });
+const note = z.string().trim().max(500).optional();
+
+export const listRevisions = defineEndpoint({
+  method: 'get',
+  path: '/api/pages/:pageId/revisions',
+  summary: 'The revisions of a page, newest first',
+  action: 'read-manuals',
+  params: pageParams,
+  query: listQuery,
+  reply: listOf(revisionSummary),
+});
+
+export const getRevision = defineEndpoint({
+  method: 'get',
+  path: '/api/pages/:pageId/revisions/:number',
+  summary: 'One revision with its document',
+  action: 'read-manuals',
+  params: oneParams,
+  reply: revision,
+});
+
+export const saveDocument = defineEndpoint({
+  method: 'put',
+  path: '/api/pages/:pageId/document',
+  summary: 'Save the document as a new revision; 409 with the current one if based on an older',
+  action: 'edit-pages',
+  params: pageParams,
+  body: z.object({ baseRevision: z.number().int().nonnegative(), document: documentJson, note }),
+  reply: revision,
+});
+
+export const restoreRevision = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/revisions/:number/restore',
+  summary: 'Make a new revision that is as an older one was',
+  action: 'edit-pages',
+  params: oneParams,
+  body: z.object({ note }).optional(),
+  reply: revision,
+});
