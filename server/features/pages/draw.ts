@@ -1,0 +1,139 @@
+import { OPS, type PDFDocumentProxy, type PDFPageProxy } from 'pdfjs-dist/legacy/build/pdf.mjs';
+import sharp, { type Sharp } from 'sharp';
+import { openPdf, pdfProblem } from './pdf.ts';
+
+export type DrawInput = { path: string; mediaType: string; sourcePage: number; target: string; mostMegapixels: number };
+export type Drawn = { width: number; height: number; dpi: number };
+
+/** A page that will fail the same way however often it is tried. */
+export class HopelessPage extends Error {
+  override name = 'HopelessPage';
+}
+
+const pointsPerInch = 72;
+const pdfDpi = 300;
+/** A PDF page larger than this is drawn at fewer dots an inch. */
+const mostDrawnPixels = 40e6;
+const jpegQuality = 90;
+/** Mean difference between colour channels, of 255, above which a scan is worth keeping in colour. */
+const colourWorthKeeping = 6;
+
+/** Draws one page of a source to a JPEG file. Runs in a worker process. */
+export async function drawPage(input: DrawInput): Promise<Drawn> {
+  return input.mediaType === 'application/pdf' ? drawPdfPage(input) : drawPicture(input);
+}
+
+async function drawPicture({ path, sourcePage, target, mostMegapixels }: DrawInput): Promise<Drawn> {
+  const options = { page: sourcePage, limitInputPixels: mostMegapixels * 1e6, failOn: 'error' } as const;
+  try {
+    const { density } = await sharp(path, options).metadata();
+    const upright = sharp(path, options).autoOrient().flatten({ background: 'white' }).toColourspace('srgb');
+    const { width, height } = await writePicture(upright, target);
+    return { width, height, dpi: believableDpi(density, height) };
+  } catch (error) {
+    throw new HopelessPage(
+      `This picture cannot be decoded: ${error instanceof Error ? firstLine(error.message) : 'unknown fault'}.`,
+    );
+  }
+}
+
+const firstLine = (text: string): string => (text.split('\n')[0] ?? '').slice(0, 120);
+
+/** Many scans carry no density, or one that was never true; a sheet is taken to be about 11 inches high then. */
+export function believableDpi(density: number | undefined, height: number): number {
+  const usualSheetInches = 11;
+  const guessed = Math.min(600, Math.max(75, Math.round(height / usualSheetInches)));
+  if (density === undefined) return guessed;
+  const inches = height / density;
+  return density >= 100 && density <= 1200 && inches > 2 && inches < 40 ? density : guessed;
+}
+
+let opened: { path: string; pdf: PDFDocumentProxy } | null = null;
+
+/** Pages of one source usually follow each other, so the document stays open between them. */
+async function documentOf(path: string): Promise<PDFDocumentProxy> {
+  if (opened?.path === path) return opened.pdf;
+  await opened?.pdf.loadingTask.destroy();
+  opened = null;
+  const pdf = await openPdf(path);
+  opened = { path, pdf };
+  return pdf;
+}
+
+async function drawPdfPage({ path, sourcePage, target }: DrawInput): Promise<Drawn> {
+  const { pdf, page } = await pageOf(path, sourcePage);
+  try {
+    const base = page.getViewport({ scale: 1 });
+    const scale = Math.min(pdfDpi / pointsPerInch, Math.sqrt(mostDrawnPixels / (base.width * base.height)));
+    const viewport = page.getViewport({ scale });
+    const [width, height] = [Math.max(1, Math.round(viewport.width)), Math.max(1, Math.round(viewport.height))];
+    const { canvas } = (pdf.canvasFactory as CanvasFactory).create(width, height);
+    await page.render({ canvas: canvas as never, viewport, background: 'white' }).promise;
+    const raw = sharp(canvas.data(), { raw: { width, height, channels: 4 } }).removeAlpha();
+    const { deviation } = await writePicture(raw, target);
+    canvas.width = 0;
+    if (deviation < 0.5 && (await holdsPictures(page))) {
+      throw new HopelessPage('The picture on this page is damaged or far too large: it came out blank.');
+    }
+    return { width, height, dpi: Math.round(scale * pointsPerInch) };
+  } finally {
+    page.cleanup();
+  }
+}
+
+type CanvasFactory = { create: (width: number, height: number) => { canvas: { width: number; data: () => Buffer } } };
+
+async function pageOf(path: string, sourcePage: number): Promise<{ pdf: PDFDocumentProxy; page: PDFPageProxy }> {
+  try {
+    const pdf = await documentOf(path);
+    return { pdf, page: await pdf.getPage(sourcePage + 1) };
+  } catch (error) {
+    throw new HopelessPage(pdfProblem(error));
+  }
+}
+
+const pictureOperators = new Set<number>([
+  OPS.paintImageXObject,
+  OPS.paintInlineImageXObject,
+  OPS.paintImageMaskXObject,
+]);
+
+async function holdsPictures(page: PDFPageProxy): Promise<boolean> {
+  const { fnArray } = await page.getOperatorList();
+  return fnArray.length <= 2 || fnArray.some((operator) => pictureOperators.has(operator));
+}
+
+/** Writes the picture as JPEG, grey unless its colours carry something; tells its size and how much it varies. */
+async function writePicture(
+  picture: Sharp,
+  target: string,
+): Promise<{ width: number; height: number; deviation: number }> {
+  const { data, info } = await picture.raw().toBuffer({ resolveWithObject: true });
+  const raw = { width: info.width, height: info.height, channels: info.channels };
+  const small = await sharp(data, { raw })
+    .resize(200, 200, { fit: 'fill' })
+    .toColourspace('srgb')
+    .removeAlpha()
+    .raw()
+    .toBuffer();
+  const { deviation, chroma } = variationOf(small);
+  const out = sharp(data, { raw });
+  const inked = chroma > colourWorthKeeping ? out : out.greyscale().toColourspace('b-w');
+  await inked.jpeg({ quality: jpegQuality, chromaSubsampling: '4:4:4' }).toFile(target);
+  return { width: info.width, height: info.height, deviation };
+}
+
+/** Standard deviation of lightness and mean distance between the colour channels, both of 255, of packed RGB pixels. */
+export function variationOf(rgb: Uint8Array): { deviation: number; chroma: number } {
+  let [sum, squares, distance] = [0, 0, 0];
+  const pixels = Math.floor(rgb.length / 3);
+  for (let at = 0; at < pixels * 3; at += 3) {
+    const [red, green, blue] = [rgb[at] ?? 0, rgb[at + 1] ?? 0, rgb[at + 2] ?? 0];
+    const light = (red + green + blue) / 3;
+    sum += light;
+    squares += light * light;
+    distance += Math.max(red, green, blue) - Math.min(red, green, blue);
+  }
+  const mean = sum / pixels;
+  return { deviation: Math.sqrt(Math.max(0, squares / pixels - mean * mean)), chroma: distance / pixels };
+}

@@ -1,0 +1,57 @@
+import { createRequire } from 'node:module';
+import path from 'node:path';
+import Tesseract, { OEM, PSM, type Worker } from 'tesseract.js';
+import type { ReadingWord } from '#shared/reading/reading.ts';
+
+const require = createRequire(import.meta.url);
+/** The language data of the npm package; its `best_int` set is the one for the LSTM engine. */
+const languageData = path.join(path.dirname(require.resolve('@tesseract.js-data/eng/package.json')), '4.0.0_best_int');
+
+export const engineName = `tesseract.js ${(require('tesseract.js/package.json') as { version: string }).version}`;
+
+let worker: Worker | null = null;
+
+async function startedWorker(): Promise<Worker> {
+  worker ??= await Tesseract.createWorker('eng', OEM.LSTM_ONLY, {
+    langPath: languageData,
+    gzip: true,
+    cacheMethod: 'none',
+    // Without this a corrupt picture would end the process: the library throws inside a message callback.
+    errorHandler: () => undefined,
+  });
+  return worker;
+}
+
+export type Segmentation = 'one-column' | 'columns';
+
+/** Recognises the words of an encoded picture whose resolution is known. Boxes are in its pixels. */
+export async function recognise(
+  picture: Buffer,
+  { segmentation, dpi }: { segmentation: Segmentation; dpi: number },
+): Promise<ReadingWord[]> {
+  const engine = await startedWorker();
+  await engine.setParameters({
+    tessedit_pageseg_mode: segmentation === 'columns' ? PSM.AUTO : PSM.SINGLE_BLOCK,
+    // Left to guess, the engine takes a wrong resolution and its line finding goes astray.
+    user_defined_dpi: String(dpi),
+    tessedit_do_invert: '0',
+  });
+  const { data } = await engine.recognize(picture, {}, { text: false, blocks: true });
+  return (data.blocks ?? []).flatMap((block, blockIndex) =>
+    block.paragraphs
+      .flatMap((paragraph) => paragraph.lines)
+      .flatMap((line, lineIndex) =>
+        line.words.map(({ text, confidence, bbox: { x0, y0, x1, y1 } }) => ({
+          text,
+          raw: text,
+          confidence,
+          box: [x0, y0, x1 - x0, y1 - y0] as ReadingWord['box'],
+          line: blockIndex * linesInBlockAtMost + lineIndex,
+          block: blockIndex,
+        })),
+      ),
+  );
+}
+
+/** Lines are numbered through the page by block and place in it; no block of a page has so many. */
+const linesInBlockAtMost = 10_000;

@@ -1,0 +1,1 @@
+export { readStep } from './steps.ts';

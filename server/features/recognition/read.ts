@@ -1,0 +1,62 @@
+import type { Zone } from '#shared/document/define-block.ts';
+import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
+import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
+import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
+import { repairWords } from '#shared/reading/repair.ts';
+import { withoutSpecks } from '#shared/reading/specks.ts';
+import { engineName, recognise } from './engine.ts';
+import { type Prepared, prepare } from './prepare.ts';
+
+export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
+
+/** A drawing has a few labels; a zone that words fill to this share is text that stands close together. */
+const mostWordsInFigure = 0.22;
+
+/** Reads one drawn page: straightens it, writes the page image to `target`, recognises its words. Runs in a worker process. */
+export async function readPage({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
+  const prepared = await prepare(drawn, dpi, { target, wish });
+  const { shown, segmentation, scale, transform } = prepared;
+  const read = await recognise(prepared.picture, { segmentation, dpi: Math.round(shown.dpi * scale) });
+  const words = repairWords(
+    read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) })),
+  );
+  return {
+    recipe: {
+      engine: engineName,
+      language: 'eng',
+      segmentation,
+      dpi: shown.dpi,
+      skewDegrees: prepared.skew,
+      rulesRemoved: prepared.rulesRemoved,
+      flattened: prepared.flattened,
+    },
+    confidence: meanConfidence(words),
+    width: shown.width,
+    height: shown.height,
+    transform,
+    words,
+    figures: figuresOf(prepared, words),
+  };
+}
+
+const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;
+
+/** By letters, not by words: a stray speck must not weigh as much as a line. */
+function meanConfidence(words: readonly ReadingWord[]): number {
+  const letters = words.reduce((sum, { text }) => sum + text.length, 0);
+  return letters === 0 ? 0 : words.reduce((sum, { text, confidence }) => sum + confidence * text.length, 0) / letters;
+}
+
+/** Words that are surely words; what the engine made of the strokes of a drawing is not. */
+const surelyWord = 60;
+
+function figuresOf({ coarse, coarseScale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
+  const toCoarse = (zone: Zone): Zone => scaled(zone, 1 / coarseScale);
+  const tables = findTables(withoutSpecks(words))
+    .filter(isWellFilled)
+    .map(({ zone }) => toCoarse(zone));
+  const sure = words.filter(({ confidence }) => confidence >= surelyWord).map(({ box }) => toCoarse(box));
+  return findFigures(coarse, shown.dpi / coarseScale, { words: sure, tables })
+    .map((zone) => scaled(zone, coarseScale))
+    .filter((zone) => words.reduce((sum, { box }) => sum + overlap(zone, box), 0) < mostWordsInFigure);
+}

@@ -1,0 +1,2 @@
+export { searchRoutes } from './routes.ts';
+export { indexStep } from './steps.ts';

@@ -1,0 +1,50 @@
+import { and, asc, eq } from 'drizzle-orm';
+import type { Quantity, Setting } from '#shared/api/quantities.ts';
+import { quantities, settings } from '#server/db/schema/index.ts';
+import type { Connection } from '#server/jobs/events.ts';
+
+export type QuantityRow = typeof quantities.$inferSelect;
+
+export const quantityRows = (db: Connection, manualId: string): QuantityRow[] =>
+  db
+    .select()
+    .from(quantities)
+    .where(eq(quantities.manualId, manualId))
+    .orderBy(asc(quantities.createdAt), asc(quantities.symbol))
+    .all();
+
+export const findQuantity = (db: Connection, manualId: string, id: string): QuantityRow | undefined =>
+  db
+    .select()
+    .from(quantities)
+    .where(and(eq(quantities.manualId, manualId), eq(quantities.id, id)))
+    .get();
+
+export const quantityReply = ({ id, definition, pageId, zone }: QuantityRow): Quantity => ({
+  ...definition,
+  id,
+  ...(pageId === null ? {} : { pageId }),
+  ...(zone === null ? {} : { zone }),
+});
+
+export const settingRows = (db: Connection, manualId: string): Setting[] =>
+  db
+    .select()
+    .from(settings)
+    .where(eq(settings.manualId, manualId))
+    .orderBy(asc(settings.name))
+    .all()
+    .map(({ id, name, inputs, createdBy, createdAt }) => ({
+      id,
+      name,
+      inputs,
+      createdBy,
+      createdAt: createdAt.toISOString(),
+    }));
+
+export const findSetting = (db: Connection, manualId: string, id: string) =>
+  db
+    .select()
+    .from(settings)
+    .where(and(eq(settings.manualId, manualId), eq(settings.id, id)))
+    .get();

@@ -1,0 +1,106 @@
+import { rm } from 'node:fs/promises';
+import http from 'node:http';
+import type { AddressInfo } from 'node:net';
+import path from 'node:path';
+import { pino } from 'pino';
+import { type Config } from '#server/config/config.ts';
+import { readOrCreateSecret } from '#server/config/secret.ts';
+import { openDatabase, projectRoot } from '#server/db/database.ts';
+import { createAuth, createMailer } from '#server/features/accounts/index.ts';
+import { addPagesBy, drawStep } from '#server/features/pages/index.ts';
+import { readStep } from '#server/features/recognition/index.ts';
+import { structureStep } from '#server/features/revisions/index.ts';
+import { indexStep } from '#server/features/search/index.ts';
+import type { Tools } from '#server/http/tools.ts';
+import { createInspector } from '#server/jobs/inspector.ts';
+import { createLiveEvents } from '#server/jobs/live-events.ts';
+import { announceBy } from '#server/jobs/queue.ts';
+import { type Steps, createRunner } from '#server/jobs/runner.ts';
+import { folderStore } from '#server/storage/folder-store.ts';
+import { s3Store } from '#server/storage/s3-store.ts';
+import { type AppTools, createApp } from './app.ts';
+import { pipeline } from './pipeline.ts';
+
+export type Running = { url: string; tools: AppTools; stop: () => Promise<void> };
+
+/** How the worker process is started: its script and the flags for the runtime, which differ between source and build. */
+export type WorkerScript = { script: string; execArgv: string[] };
+
+const slowestStopMs = 8000;
+/** The examiner of new files needs little; a file that makes it need more is not a scan. */
+const inspectorMemoryBytes = 500 * 1024 * 1024;
+const inspectorTimeoutMs = 30_000;
+
+/** Opens the database, starts the queue and listens. Everything that runs hangs on what this returns. */
+export async function startServer(config: Config, worker: WorkerScript): Promise<Running> {
+  const log = pino({ level: config.logLevel });
+  const { db, raw, close } = openDatabase(config.dataDir);
+  await rm(path.join(config.dataDir, 'incoming'), { recursive: true, force: true });
+  const server = http.createServer((_request, response) => response.writeHead(503).end());
+  const { url, trustedOrigins } = await listen(server, config);
+
+  const announce = announceBy(pipeline);
+  const live = createLiveEvents();
+  const now = (): Date => new Date();
+  const files =
+    config.s3 === null
+      ? folderStore(path.join(config.dataDir, 'files'))
+      : s3Store(config.s3, path.join(config.dataDir, 'cache'));
+  const tools: Tools = { config, db, raw, files, announce, live, log, now, wake: () => runner.wake() };
+  const limits = { memoryBytes: config.limits.workerMemoryBytes, timeoutMs: config.limits.pageTimeoutMs };
+  const runner = createRunner({
+    db,
+    steps: stepsOf(tools),
+    workers: config.recognitionWorkers,
+    worker: { ...worker, ...limits },
+    live,
+    log,
+    now,
+  });
+  const inspector = createInspector({ ...worker, memoryBytes: inspectorMemoryBytes, timeoutMs: inspectorTimeoutMs });
+
+  const sendMail = createMailer(tools);
+  const auth = createAuth(tools, {
+    secret: readOrCreateSecret(config.dataDir),
+    publicUrl: config.publicUrl ?? url,
+    trustedOrigins,
+    sendMail,
+  });
+  const clientDir = path.join(projectRoot, 'dist/client');
+  const appTools: AppTools = { ...tools, auth, inspector, addPages: addPagesBy(announce), trustedOrigins, clientDir };
+  const { app } = createApp(appTools);
+  server.removeAllListeners('request');
+  server.on('request', app);
+  runner.start();
+
+  const stop = async (): Promise<void> => {
+    inspector.stop();
+    const closed = new Promise((resolve) => server.close(resolve));
+    await runner.stop();
+    server.closeIdleConnections();
+    await Promise.race([closed, new Promise((resolve) => setTimeout(resolve, slowestStopMs / 4).unref())]);
+    server.closeAllConnections();
+    close();
+  };
+  return { url, tools: appTools, stop };
+}
+
+const stepsOf = (tools: Tools): Steps => ({
+  'draw-page': drawStep(tools),
+  'read-page': readStep(tools),
+  'structure-page': structureStep(tools),
+  'index-page': indexStep(tools),
+});
+
+/** Listens, and says under which addresses its own pages are opened: the one configured, this machine's, and the development server's. */
+async function listen(server: http.Server, config: Config): Promise<{ url: string; trustedOrigins: string[] }> {
+  await new Promise<void>((resolve, reject) => {
+    server.once('error', reject);
+    server.listen(config.port, config.host, () => resolve());
+  });
+  const { port } = server.address() as AddressInfo;
+  const own = ['127.0.0.1', 'localhost'].map((host) => `http://${host}:${port}`);
+  const development = config.production ? [] : ['http://127.0.0.1:5173', 'http://localhost:5173'];
+  const configured = config.publicUrl === null ? [] : [new URL(config.publicUrl).origin];
+  return { url: `http://127.0.0.1:${port}`, trustedOrigins: [...configured, ...own, ...development] };
+}

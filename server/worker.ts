@@ -1,0 +1,33 @@
+import { type InspectInput, inspect } from '#server/features/pages/inspect.ts';
+import { type DrawInput, drawPage } from '#server/features/pages/draw.ts';
+import type { WorkerReply, WorkerRequest } from '#server/jobs/worker-pool.ts';
+import type { ReadInput } from '#server/features/recognition/read.ts';
+
+/**
+ * The worker process: examines files, draws pages and reads them, one at a time. It holds no database and may be killed
+ * at any moment. The reading engine is loaded only when there is something to read.
+ */
+const tasks: Record<string, (input: never) => Promise<unknown>> = {
+  inspect: (input: InspectInput) => inspect(input),
+  draw: (input: DrawInput) => drawPage(input),
+  read: async (input: ReadInput) => (await import('#server/features/recognition/read.ts')).readPage(input),
+};
+
+async function answer({ id, task, input }: WorkerRequest): Promise<WorkerReply> {
+  try {
+    const run = tasks[task];
+    if (run === undefined) throw new Error(`There is no task called ${task}.`);
+    return { id, ok: true, value: await run(input as never) };
+  } catch (error) {
+    const hopeless = error instanceof Error && error.name === 'HopelessPage';
+    const problem = error instanceof Error ? error.message : String(error);
+    return { id, ok: false, hopeless, problem };
+  }
+}
+
+process.on('message', (request: WorkerRequest) => {
+  void answer(request).then((reply) => process.send?.(reply));
+});
+process.on('disconnect', () => process.exit(0));
+// Libraries throw inside callbacks on bad files; the job is then failed by its time limit or by this exit.
+process.on('uncaughtException', () => process.exit(1));
