@@ -1,0 +1,136 @@
+import { derived, livePlacesOn, printed } from './quantity.ts';
+import type { DemoQuantity, LivePlace } from './types.ts';
+
+export const sg4Quantities: DemoQuantity[] = [
+  {
+    symbol: 'output',
+    label: 'Output frequency, band F',
+    kind: 'input',
+    unit: 'mc',
+    home: 156.6,
+    printed: printed('156.600 mc', '3-1', 'paragraph 3.3'),
+  },
+  {
+    symbol: 'markNumber',
+    label: 'Number of the mark',
+    kind: 'input',
+    unit: '',
+    home: 52,
+    integer: true,
+    printed: printed('52', '3-1', 'paragraph 3.3, step b'),
+  },
+  {
+    symbol: 'calibrator',
+    label: 'Calibrator crystal',
+    kind: 'constant',
+    unit: 'kc',
+    home: 1000,
+    printed: printed('1000 kc', '1-1', 'Table 1-1'),
+  },
+  {
+    symbol: 'calibratorTolerance',
+    label: 'Calibrator tolerance',
+    kind: 'constant',
+    unit: 'percent',
+    home: 0.005,
+    printed: printed('0.005 percent', '1-1', 'Table 1-1'),
+  },
+  {
+    symbol: 'dialAccuracy',
+    label: 'Dial accuracy',
+    kind: 'constant',
+    unit: 'percent',
+    home: 1,
+    printed: printed('1 percent', '1-1', 'Table 1-1'),
+  },
+  {
+    symbol: 'tripling',
+    label: 'Multiplication on band F',
+    kind: 'constant',
+    unit: '',
+    home: 3,
+    integer: true,
+    printed: printed('3', '3-1', 'paragraph 3.3, step a'),
+  },
+  {
+    symbol: 'standard',
+    label: 'Standard frequency transmission',
+    kind: 'constant',
+    unit: 'mc',
+    home: 10,
+    printed: printed('10.000 mc', '3-1', 'paragraph 3.2, step a'),
+  },
+  derived(
+    ['standardHarmonic', '', 'standard / calibrator'],
+    'Calibrator harmonic at the standard',
+    printed('10', '3-1', 'paragraph 3.2, step b'),
+  ),
+  derived(
+    ['oscillator', 'mc', 'output / tripling'],
+    'Oscillator frequency, band F',
+    printed('52.200 mc', '3-1', 'paragraph 3.3, step a'),
+  ),
+  derived(
+    ['markFrequency', 'mc', 'markNumber * calibrator'],
+    'Frequency of the mark',
+    printed('52.000 mc', '3-1', 'paragraph 3.3, step b'),
+  ),
+  derived(
+    ['vernierOffset', 'kc', 'oscillator - markFrequency'],
+    'Offset on the vernier',
+    printed('200 kc', '3-1', 'paragraph 3.3, step d'),
+  ),
+  derived(
+    ['markOutput', 'mc', 'markFrequency * tripling'],
+    'Output at the mark, band F',
+    printed('156.000 mc', '3-1', 'paragraph 3.3, step e'),
+  ),
+  derived(
+    ['markError', 'kc', 'markFrequency * calibratorTolerance'],
+    'Greatest error of the mark',
+    printed('2.6 kc', '3-1', 'paragraph 3.4, step a'),
+  ),
+  derived(
+    ['outputError', 'kc', 'markError * tripling'],
+    'Greatest error of the output',
+    printed('7.8 kc', '3-1', 'paragraph 3.4, step a'),
+  ),
+  derived(
+    ['dialError', 'kc', 'oscillator * dialAccuracy'],
+    'Greatest error of the dial',
+    printed('522 kc', '3-1', 'paragraph 3.4, step b'),
+  ),
+];
+
+export const sg4LivePlaces: LivePlace[] = [
+  ...livePlacesOn('1-1', [
+    ['calibrator', '1000 kc', 'crystal calibrator of'],
+    ['dialAccuracy', '1 percent', 'Dial accuracy'],
+    ['calibrator', '1000 kc', 'Calibrator crystal'],
+    ['calibratorTolerance', '0.005 percent'],
+  ]),
+  ...livePlacesOn('2-1', [['dialAccuracy', '1 percent']]),
+  ...livePlacesOn('3-1', [
+    ['standard', '10.000 mc'],
+    ['standardHarmonic', '10', 'Harmonic'],
+    ['calibrator', '1000 kc'],
+    ['output', '156.600 mc'],
+    ['tripling', '3', 'Divide by'],
+    ['oscillator', '52.200 mc', 'must run at'],
+    ['markNumber', '52', 'It is number'],
+    ['markFrequency', '52.000 mc', 'number 52, at'],
+    ['markFrequency', '52.000 mc', 'dial through'],
+    ['vernierOffset', '200 kc'],
+    ['markOutput', '156.000 mc'],
+    ['calibratorTolerance', '0.005 percent'],
+    ['markError', '2.6 kc'],
+    ['outputError', '7.8 kc'],
+    ['dialAccuracy', '1 percent'],
+    ['oscillator', '52.200 mc', '1 percent. At'],
+    ['dialError', '522 kc'],
+  ]),
+  ...livePlacesOn('4-1', [
+    ['calibrator', '1000 kc'],
+    ['calibratorTolerance', '0.005%'],
+  ]),
+];
