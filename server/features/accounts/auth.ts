@@ -29,6 +29,8 @@ export function createAuth({ db }: Pick<Tools, 'db'>, { secret, publicUrl, trust
     trustedOrigins,
     database: drizzleAdapter(db, { provider: 'sqlite', schema: { user, session, account, verification } }),
     telemetry: { enabled: false },
+    // A mistyped password is answered, not logged: only what is wrong with the server is.
+    logger: { level: 'error' },
     emailAndPassword: {
       enabled: true,
       disableSignUp: true,
