@@ -15,6 +15,8 @@ const chapter = /^(section|chapter|part|appendix)\s+([IVXLC]+|\d+|[A-Z])\b/i;
 const numbered = /^(\d+(?:[-–.]\d+)+)\.?$/;
 /** "a." "(3)" "12." "b)" - one or two letters or digits with a closing sign, as steps are marked. */
 const marker = /^\(?([a-z]{1,2}|[A-Z]|\d{1,2})[.)]$/;
+/** How recognition bends a lone small letter with its stop: "Cc." for "c.", "c," or "¢." for "c.". */
+const bentMarker = /^(\(?)([A-Z])?([a-z])([.,)])$/;
 const longestHeadingWords = 9;
 
 /** Says what a line is by its words alone; its place on the page is for the caller to judge. */
@@ -29,7 +31,7 @@ export function classifyLine(line: Line): LineKind {
 }
 
 function headingOrStep({ words }: Line, text: string): LineKind {
-  const first = words[0]?.text ?? '';
+  const first = straightened(words[0]?.text ?? '');
   const rest = words
     .slice(1)
     .map((each) => each.text)
@@ -41,6 +43,13 @@ function headingOrStep({ words }: Line, text: string): LineKind {
   const isShort = words.length <= longestHeadingWords;
   const isHeading = isShort && (numbered.test(first) ? isCapitals(rest) : isCapitals(text) && /[A-Z]{3}/.test(text));
   return isHeading ? { kind: 'heading', level: isMarked ? 3 : 2 } : { kind: 'text' };
+}
+
+function straightened(printed: string): string {
+  const word = printed.replace(/[¢©]/, 'c');
+  const [, open = '', capital, letter = '', close = ''] = bentMarker.exec(word) ?? [];
+  if (letter === '' || (capital !== undefined && capital.toLowerCase() !== letter)) return word;
+  return `${open}${letter}${close === ',' ? '.' : close}`;
 }
 
 /** All capitals, digits and signs, with at least one word of them. */

@@ -17,10 +17,10 @@ export const bottomOf = ([, y, , h]: Zone): number => y + h;
 export const rightOf = ([x, , w]: Zone): number => x + w;
 export const middleOf = ([, y, , h]: Zone): number => y + h / 2;
 
-/** The middle of a list of numbers, 0 for an empty one. */
+/** The middle of a list of numbers, the lower of two; 0 for an empty list. */
 export function median(numbers: readonly number[]): number {
   const sorted = [...numbers].sort((a, b) => a - b);
-  return sorted[Math.floor(sorted.length / 2)] ?? 0;
+  return sorted[Math.floor((sorted.length - 1) / 2)] ?? 0;
 }
 
 /** Groups words by the engine's own lines, which follow the reading order it found. */

@@ -4,7 +4,7 @@ const folded = new Map(lookAlikes.flatMap((row) => [...row].map((letter) => [let
 
 /** The word with look-alike letters made one, and m for rn: two words that fold alike may be the same print. */
 export const foldLookAlikes = (word: string): string =>
-  [...word.replaceAll('rn', 'm')].map((letter) => folded.get(letter) ?? letter).join('');
+  [...word.toLowerCase().replaceAll('rn', 'm')].map((letter) => folded.get(letter) ?? letter).join('');
 
 /** Whether a word on a page may be what was looked for, bent by recognition: alike, or one slip in each six letters off. */
 export function isClose(found: string, wanted: string): boolean {

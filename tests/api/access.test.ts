@@ -14,7 +14,9 @@ beforeAll(async () => {
   const { body } = await request(server.url).get('/api/openapi.json');
   routes = Object.entries(body.paths as Record<string, Record<string, Operation>>).flatMap(([path, operations]) =>
     Object.entries(operations).flatMap(([method, operation]) =>
-      operation['x-role'] === undefined ? [] : [{ method: method as Route['method'], path, lowest: operation['x-role'] }],
+      operation['x-role'] === undefined
+        ? []
+        : [{ method: method as Route['method'], path, lowest: operation['x-role'] }],
     ),
   );
 });
@@ -22,7 +24,9 @@ afterAll(() => server.stop());
 
 /** The status alone: a stream of events is cut as soon as it starts. */
 async function statusOf({ method, path }: Route, cookie: string): Promise<number> {
-  const filled = path.replace(/\{(\w+)\}/g, (_whole, name: string) => (name === 'number' ? '1' : 'nothing-of-this-name'));
+  const filled = path.replace(/\{(\w+)\}/g, (_whole, name: string) =>
+    name === 'number' ? '1' : 'nothing-of-this-name',
+  );
   const stopper = new AbortController();
   const hasBody = method !== 'get' && method !== 'delete';
   const response = await fetch(server.url + filled, {
@@ -41,7 +45,8 @@ describe('every guarded route', () => {
   });
 
   it('answers 401 to a stranger', async () => {
-    for (const route of routes) expect([route.method, route.path, await statusOf(route, '')]).toEqual([route.method, route.path, 401]);
+    for (const route of routes)
+      expect([route.method, route.path, await statusOf(route, '')]).toEqual([route.method, route.path, 401]);
   });
 
   it.each(roles)('lets a %s do what the table says and nothing else', async (role) => {

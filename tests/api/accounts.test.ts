@@ -17,7 +17,11 @@ const tokenIn = (text: string): string => /token=([^\s&]+)/.exec(text)?.[1] ?? '
 describe('an invitation', () => {
   it('goes out by e-mail, lets its person choose a password once, and sign in', async () => {
     const admin = await server.as('administrator');
-    const invited = await admin.post('/api/people', { name: 'Nils New', email: 'nils@test.example', role: 'technician' });
+    const invited = await admin.post('/api/people', {
+      name: 'Nils New',
+      email: 'nils@test.example',
+      role: 'technician',
+    });
     expect(invited).toMatchObject({ status: 201, body: { state: 'invited', role: 'technician' } });
 
     const { items } = (await admin.get('/api/outbox')).body;
@@ -90,7 +94,9 @@ describe('people', () => {
 
   it('leave a line in the audit trail with every change', async () => {
     const { items } = (await (await server.as('administrator')).get('/api/audit')).body;
-    expect(items.map(({ did }: { did: string }) => did)).toEqual(expect.arrayContaining(['invited', 'changed a person', 'added a manual']));
+    expect(items.map(({ did }: { did: string }) => did)).toEqual(
+      expect.arrayContaining(['invited', 'changed a person', 'added a manual']),
+    );
   });
 });
 
@@ -108,7 +114,9 @@ describe('with a mail server configured', () => {
     const { port } = smtp.server.address() as { port: number };
     const own = await startTestServer({ env: { SMTP_URL: `smtp://127.0.0.1:${port}` } });
     const admin = await own.as('administrator');
-    expect((await admin.post('/api/people', { name: 'Mia', email: 'mia@test.example', role: 'reader' })).status).toBe(201);
+    expect((await admin.post('/api/people', { name: 'Mia', email: 'mia@test.example', role: 'reader' })).status).toBe(
+      201,
+    );
     expect(received.join('')).toContain('To: mia@test.example');
     expect((await admin.get('/api/outbox')).status).toBe(404);
     await own.stop();
@@ -119,7 +127,10 @@ describe('with a mail server configured', () => {
 // Last, because it uses up the sign-ins of a minute.
 describe('the door', () => {
   it('is closed to sign-up and to the sign-in library\u2019s own administration', async () => {
-    const up = await request(server.url).post('/api/auth/sign-up/email').set('Origin', server.url).send({ email: 'a@b.example', password: 'long-enough-1', name: 'A' });
+    const up = await request(server.url)
+      .post('/api/auth/sign-up/email')
+      .set('Origin', server.url)
+      .send({ email: 'a@b.example', password: 'long-enough-1', name: 'A' });
     expect(up.status).toBe(400);
     const admin = await server.as('administrator');
     expect((await admin.get('/api/auth/admin/list-users')).status).toBe(404);
@@ -127,12 +138,20 @@ describe('the door', () => {
 
   it('refuses changes that come from another site', async () => {
     const admin = await server.as('administrator');
-    const reply = await request(server.url).post('/api/manuals').set('Cookie', admin.cookie).set('Origin', 'https://elsewhere.example').send({ title: 'x' });
+    const reply = await request(server.url)
+      .post('/api/manuals')
+      .set('Cookie', admin.cookie)
+      .set('Origin', 'https://elsewhere.example')
+      .send({ title: 'x' });
     expect(reply.status).toBe(403);
   });
 
   it('slows down whoever guesses passwords', async () => {
-    const guess = () => request(server.url).post('/api/auth/sign-in/email').set('Origin', server.url).send({ email: addressOf('reader'), password: 'wrong-password' });
+    const guess = () =>
+      request(server.url)
+        .post('/api/auth/sign-in/email')
+        .set('Origin', server.url)
+        .send({ email: addressOf('reader'), password: 'wrong-password' });
     const statuses: number[] = [];
     for (let tries = 0; tries < 40; tries += 1) statuses.push((await guess()).status);
     expect(statuses[0]).toBe(401);

@@ -10,10 +10,19 @@ afterAll(() => server.stop());
 describe('a manual', () => {
   it('is added by an archivist, with what is known of it', async () => {
     const archivist = await server.as('archivist');
-    const reply = await archivist.post('/api/manuals', { title: ' SG-4 Signal Generator ', documentNumber: 'TW 204-1' });
-    expect(reply).toMatchObject({ status: 201, body: { title: 'SG-4 Signal Generator', documentNumber: 'TW 204-1', maker: null, deletedAt: null } });
+    const reply = await archivist.post('/api/manuals', {
+      title: ' SG-4 Signal Generator ',
+      documentNumber: 'TW 204-1',
+    });
+    expect(reply).toMatchObject({
+      status: 201,
+      body: { title: 'SG-4 Signal Generator', documentNumber: 'TW 204-1', maker: null, deletedAt: null },
+    });
     const reader = await server.as('reader');
-    expect((await reader.get(`/api/manuals/${reply.body.id}`)).body).toMatchObject({ title: 'SG-4 Signal Generator', pageCounts: { all: 0 } });
+    expect((await reader.get(`/api/manuals/${reply.body.id}`)).body).toMatchObject({
+      title: 'SG-4 Signal Generator',
+      pageCounts: { all: 0 },
+    });
   });
 
   it('needs a title', async () => {
@@ -25,13 +34,18 @@ describe('a manual', () => {
     const archivist = await server.as('archivist');
     const id = await archivist.newManual('A');
     await archivist.patch(`/api/manuals/${id}`, { equipment: 'HB-12', maker: null });
-    expect((await archivist.get(`/api/manuals/${id}`)).body).toMatchObject({ title: 'A', equipment: 'HB-12', maker: null });
+    expect((await archivist.get(`/api/manuals/${id}`)).body).toMatchObject({
+      title: 'A',
+      equipment: 'HB-12',
+      maker: null,
+    });
   });
 
   it('goes to the bin and comes back', async () => {
     const archivist = await server.as('archivist');
     const id = await archivist.newManual('Binned');
-    const titles = async (query = '') => (await archivist.get(`/api/manuals${query}`)).body.items.map(({ title }: { title: string }) => title);
+    const titles = async (query = '') =>
+      (await archivist.get(`/api/manuals${query}`)).body.items.map(({ title }: { title: string }) => title);
     expect((await archivist.delete(`/api/manuals/${id}`)).status).toBe(200);
     expect((await archivist.get(`/api/manuals/${id}`)).status).toBe(404);
     expect(await titles()).not.toContain('Binned');

@@ -14,9 +14,30 @@ beforeAll(async () => {
   const quantities = [
     { symbol: 'channel', label: 'Channel', kind: 'input', unit: '', home: 12, integer: true },
     { symbol: 'firstIf', label: 'First i-f', kind: 'constant', unit: 'mc', home: 10.7, printed: { text: '10.700 mc' } },
-    { symbol: 'carrier', label: 'Carrier', kind: 'derived', unit: 'mc', expression: 'lookup("maritime-vhf", channel, "ship")', printed: { text: '156.600 mc' } },
-    { symbol: 'injection', label: 'Injection', kind: 'derived', unit: 'mc', expression: 'carrier - firstIf', printed: { text: '145.900 mc' } },
-    { symbol: 'crystal', label: 'Crystal', kind: 'derived', unit: 'mc', expression: 'injection / 9', printed: { text: '16.211111 mc' } },
+    {
+      symbol: 'carrier',
+      label: 'Carrier',
+      kind: 'derived',
+      unit: 'mc',
+      expression: 'lookup("maritime-vhf", channel, "ship")',
+      printed: { text: '156.600 mc' },
+    },
+    {
+      symbol: 'injection',
+      label: 'Injection',
+      kind: 'derived',
+      unit: 'mc',
+      expression: 'carrier - firstIf',
+      printed: { text: '145.900 mc' },
+    },
+    {
+      symbol: 'crystal',
+      label: 'Crystal',
+      kind: 'derived',
+      unit: 'mc',
+      expression: 'injection / 9',
+      printed: { text: '16.211111 mc' },
+    },
   ];
   for (const quantity of quantities) expect((await editor.post(at('quantities'), quantity)).status).toBe(201);
 });
@@ -31,14 +52,26 @@ describe('quantities', () => {
 
   it.each([
     ['a symbol that is taken', { symbol: 'crystal', label: '', kind: 'constant', unit: '', home: 1 }, 409, 'symbol'],
-    ['a unit that is not in the table', { symbol: 'a1', label: '', kind: 'constant', unit: 'furlong', home: 1 }, 400, 'unit'],
+    [
+      'a unit that is not in the table',
+      { symbol: 'a1', label: '', kind: 'constant', unit: 'furlong', home: 1 },
+      400,
+      'unit',
+    ],
     ['a derived one without an expression', { symbol: 'a1', label: '', kind: 'derived', unit: '' }, 400, 'expression'],
   ])('are refused with %s', async (_what, quantity, status, path) => {
     expect(await editor.post(at('quantities'), quantity)).toMatchObject({ status, body: { issues: [{ path }] } });
   });
 
   it('are changed key by key, and null takes a key away', async () => {
-    const { body: made } = await editor.post(at('quantities'), { symbol: 'spare', label: 'Spare', kind: 'constant', unit: 'kc', home: 25, printed: { text: '25 kc' } });
+    const { body: made } = await editor.post(at('quantities'), {
+      symbol: 'spare',
+      label: 'Spare',
+      kind: 'constant',
+      unit: 'kc',
+      home: 25,
+      printed: { text: '25 kc' },
+    });
     const { body } = await editor.patch(at(`quantities/${made.id}`), { home: 50, printed: null });
     expect(body).toMatchObject({ symbol: 'spare', home: 50 });
     expect(body.printed).toBeUndefined();
@@ -56,7 +89,11 @@ describe('evaluating', () => {
 
   it('moves every value that depends on the channel', async () => {
     const { body } = await (await server.as('reader')).post(at('evaluate'), { inputs: { channel: 16 } });
-    expect(body.values).toMatchObject({ carrier: { text: '156.800 mc' }, injection: { text: '146.100 mc' }, crystal: { text: '16.233333 mc' } });
+    expect(body.values).toMatchObject({
+      carrier: { text: '156.800 mc' },
+      injection: { text: '146.100 mc' },
+      crystal: { text: '16.233333 mc' },
+    });
     expect(body.values.crystal.value).toBeCloseTo(146.1 / 9, 12);
   });
 
@@ -80,10 +117,19 @@ describe('evaluating', () => {
 describe('the proof', () => {
   it('holds while every value comes out as printed, and names the one that does not', async () => {
     expect((await editor.get(at('proof'))).body).toMatchObject({ holds: true });
-    const { body: wrong } = await editor.post(at('quantities'), { symbol: 'image', label: 'Image', kind: 'derived', unit: 'mc', expression: 'carrier - firstIf', printed: { text: '135.200 mc' } });
+    const { body: wrong } = await editor.post(at('quantities'), {
+      symbol: 'image',
+      label: 'Image',
+      kind: 'derived',
+      unit: 'mc',
+      expression: 'carrier - firstIf',
+      printed: { text: '135.200 mc' },
+    });
     const { body } = await editor.get(at('proof'));
     expect(body.holds).toBe(false);
-    expect(body.items.filter(({ agrees }: { agrees: boolean }) => !agrees)).toMatchObject([{ symbol: 'image', printed: '135.200 mc', computed: '145.900 mc', quantityId: wrong.id }]);
+    expect(body.items.filter(({ agrees }: { agrees: boolean }) => !agrees)).toMatchObject([
+      { symbol: 'image', printed: '135.200 mc', computed: '145.900 mc', quantityId: wrong.id },
+    ]);
   });
 });
 
@@ -93,7 +139,9 @@ describe('settings', () => {
     const made = await technician.post(at('settings'), { name: 'Unit 7, channel 16', inputs: { channel: 16 } });
     expect(made.status).toBe(201);
     const { body } = await (await server.as('reader')).get(at('settings'));
-    expect(body.items).toMatchObject([{ name: 'Unit 7, channel 16', inputs: { channel: 16 }, createdBy: 'Test technician' }]);
+    expect(body.items).toMatchObject([
+      { name: 'Unit 7, channel 16', inputs: { channel: 16 }, createdBy: 'Test technician' },
+    ]);
     expect((await technician.delete(at(`settings/${made.body.id}`))).status).toBe(200);
   });
 });

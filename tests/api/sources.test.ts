@@ -15,7 +15,8 @@ beforeAll(async () => {
 afterAll(() => server.stop());
 
 const sha256 = (bytes: Uint8Array): string => createHash('sha256').update(bytes).digest('hex');
-const takeIn = async (name: string, bytes: Uint8Array) => archivist.upload(await archivist.newManual(), [{ name, bytes }]);
+const takeIn = async (name: string, bytes: Uint8Array) =>
+  archivist.upload(await archivist.newManual(), [{ name, bytes }]);
 
 describe('a source', () => {
   it('is kept byte for byte under its SHA-256, and comes back the same', async () => {
@@ -24,7 +25,14 @@ describe('a source', () => {
     const reply = await archivist.upload(manualId, [{ name: 'HB-12.pdf', bytes }]);
     expect(reply).toMatchObject({ status: 202 });
     const [item] = reply.body.items;
-    expect(item).toMatchObject({ fileName: 'HB-12.pdf', sha256: sha256(bytes), bytes: bytes.length, mediaType: 'application/pdf', pageCount: 2, state: 'ready' });
+    expect(item).toMatchObject({
+      fileName: 'HB-12.pdf',
+      sha256: sha256(bytes),
+      bytes: bytes.length,
+      mediaType: 'application/pdf',
+      pageCount: 2,
+      state: 'ready',
+    });
     const kept = readFileSync(path.join(server.dataDir, 'files/sources', item.sha256.slice(0, 2), item.sha256));
     expect(sha256(kept)).toBe(item.sha256);
     const back = await archivist.get(`/api/sources/${item.id}/file`);
@@ -41,7 +49,10 @@ describe('a source', () => {
     const bytes = drawSheet(sheet(3));
     const first = await archivist.upload(manualId, [{ name: 'a.jpg', bytes }]);
     const second = await archivist.upload(manualId, [{ name: 'b.jpg', bytes }]);
-    expect(second).toMatchObject({ status: 202, body: { items: [{ id: first.body.items[0].id, state: 'duplicate' }] } });
+    expect(second).toMatchObject({
+      status: 202,
+      body: { items: [{ id: first.body.items[0].id, state: 'duplicate' }] },
+    });
     expect(second.body.items[0].problem).toContain('a.jpg');
     expect(await archivist.pagesOf(manualId)).toHaveLength(1);
   });
@@ -60,8 +71,14 @@ describe('a source', () => {
   });
 
   it('with several pages in one TIFF brings as many pages', async () => {
-    const { data, info } = await sharp(drawSheet(sheet(5))).greyscale().toColourspace('b-w').raw().toBuffer({ resolveWithObject: true });
-    const bytes = await sharp(Buffer.concat([data, data, data]), { raw: { width: info.width, height: info.height * 3, channels: 1, pageHeight: info.height } })
+    const { data, info } = await sharp(drawSheet(sheet(5)))
+      .greyscale()
+      .toColourspace('b-w')
+      .raw()
+      .toBuffer({ resolveWithObject: true });
+    const bytes = await sharp(Buffer.concat([data, data, data]), {
+      raw: { width: info.width, height: info.height * 3, channels: 1, pageHeight: info.height },
+    })
       .tiff()
       .toBuffer();
     expect(await takeIn('three.tif', bytes)).toMatchObject({ status: 202, body: { items: [{ pageCount: 3 }] } });
@@ -88,7 +105,9 @@ describe('a file that cannot be taken', () => {
     ];
     const { status, body } = await archivist.upload(manualId, files);
     expect(status).toBe(202);
-    const said = Object.fromEntries(body.items.map(({ fileName, state, problem }: any) => [fileName, `${state}: ${problem}`]));
+    const said = Object.fromEntries(
+      body.items.map(({ fileName, state, problem }: any) => [fileName, `${state}: ${problem}`]),
+    );
     expect(said).toEqual({
       'empty.pdf': expect.stringMatching(/^refused: .*empty/),
       'program.pdf': expect.stringMatching(/^refused: .*not a PDF/),

@@ -1,7 +1,9 @@
 import type { DocNode } from '#shared/document/define-block.ts';
 
 export const text = (words: string, ...marks: string[]): DocNode =>
-  marks.length === 0 ? { type: 'text', text: words } : { type: 'text', text: words, marks: marks.map((type) => ({ type })) };
+  marks.length === 0
+    ? { type: 'text', text: words }
+    : { type: 'text', text: words, marks: marks.map((type) => ({ type })) };
 
 export const word = (words: string, zone: [number, number, number, number] = [10, 20, 30, 12]): DocNode => ({
   type: 'text',
@@ -43,10 +45,22 @@ export const partsTable = (): DocNode =>
         { heading: 'QTY', meaning: 'quantity' },
       ],
     },
-    block('tableRow', { role: 'head' }, ...['REF. DES.', 'DESCRIPTION', 'PART NO.', 'QTY'].map((each) => cell('tableHeader', each))),
+    block(
+      'tableRow',
+      { role: 'head' },
+      ...['REF. DES.', 'DESCRIPTION', 'PART NO.', 'QTY'].map((each) => cell('tableHeader', each)),
+    ),
     block('tableRow', { role: 'section' }, ...['', 'CAPACITORS', '', ''].map((each) => cell('tableCell', each))),
-    block('tableRow', { role: 'body' }, ...['C1', 'Mica, 47 µµf ±5%', '22-1470', '1'].map((each) => cell('tableCell', each))),
-    block('tableRow', { role: 'body' }, ...['C2,C3', 'Paper, .01 mfd', '24-4103', '2'].map((each) => cell('tableCell', each))),
+    block(
+      'tableRow',
+      { role: 'body' },
+      ...['C1', 'Mica, 47 µµf ±5%', '22-1470', '1'].map((each) => cell('tableCell', each)),
+    ),
+    block(
+      'tableRow',
+      { role: 'body' },
+      ...['C2,C3', 'Paper, .01 mfd', '24-4103', '2'].map((each) => cell('tableCell', each)),
+    ),
   );
 
 /** One of every kind, as a page may hold it. */
@@ -59,7 +73,13 @@ export const everyKind = (): DocNode =>
       type: 'liveValue',
       attrs: { quantity: 'q1', printed: '156.600 mc', zone: [5, 6, 70, 12] },
     }),
-    block('step', { id: 'b4', marker: '(1)', depth: 1 }, doubtful('injeclion'), { type: 'hardBreak' }, text('goes on', 'italic', 'underline')),
+    block(
+      'step',
+      { id: 'b4', marker: '(1)', depth: 1 },
+      doubtful('injeclion'),
+      { type: 'hardBreak' },
+      text('goes on', 'italic', 'underline'),
+    ),
     partsTable(),
     block('figure', { id: 'b5', zone: [10, 10, 500, 300], description: 'Block diagram' }),
     block('caption', { id: 'b6', of: 'figure' }, text('Figure 5-1. Chain')),

@@ -98,12 +98,19 @@ export class Caller {
 }
 
 /** Looks again until something holds; fails loudly, with what it last saw, when it never does. */
-export async function eventually<T>(look: () => Promise<T>, holds: (seen: T) => boolean, withinMs = 120_000): Promise<T> {
+export async function eventually<T>(
+  look: () => Promise<T>,
+  holds: (seen: T) => boolean,
+  withinMs = 120_000,
+): Promise<T> {
   const end = Date.now() + withinMs;
   for (;;) {
     const seen = await look();
     if (holds(seen)) return seen;
-    if (Date.now() > end) throw new Error(`It did not come to hold within ${withinMs} ms. Last seen: ${JSON.stringify(seen).slice(0, 2000)}`);
+    if (Date.now() > end)
+      throw new Error(
+        `It did not come to hold within ${withinMs} ms. Last seen: ${JSON.stringify(seen).slice(0, 2000)}`,
+      );
     await new Promise((resolve) => setTimeout(resolve, 200));
   }
 }
