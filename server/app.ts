@@ -1,3 +1,4 @@
+import { readFile } from 'node:fs/promises';
 import path from 'node:path';
 import { toNodeHandler } from 'better-auth/node';
 import express, { type Express, type RequestHandler, Router } from 'express';
@@ -5,7 +6,7 @@ import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 import { getHealth } from '#shared/api/health.ts';
 import { AppError } from '#shared/kit/app-error.ts';
-import { type Auth, accountRoutes, sessionFinder } from '#server/features/accounts/index.ts';
+import { type Auth, accountRoutes, hasDemoPeople, sessionFinder } from '#server/features/accounts/index.ts';
 import { type AddPages, manualRoutes } from '#server/features/manuals/index.ts';
 import { pageRoutes } from '#server/features/pages/index.ts';
 import { revisionRoutes } from '#server/features/revisions/index.ts';
@@ -50,7 +51,7 @@ export function createApp(tools: AppTools): { app: Express; api: ApiRouter } {
   const api = apiRoutes(tools);
   app.use(api.router);
   app.use('/api', unknownRoute);
-  serveClient(app, tools.clientDir);
+  serveClient(app, tools);
   app.use(problemHandler);
   return { app, api };
 }
@@ -108,14 +109,22 @@ const secureHeaders = (): RequestHandler =>
     },
   });
 
+/** Tells the sign-in screen that the demo's accounts can be offered. */
+const demoMark = '<meta name="benchleaf-demo" content="yes">';
+const notBuilt = '<!doctype html><title>Benchleaf</title><p>The client has not been built: npm run build.';
+
 /** The built client. A missing piece of it is a 404, not the start page; every other address is a screen. */
-function serveClient(app: Express, clientDir: string): void {
+function serveClient(app: Express, { clientDir, db }: AppTools): void {
   app.use(
     '/assets',
     express.static(path.join(clientDir, 'assets'), { immutable: true, maxAge: '1y', fallthrough: false }),
   );
   app.use(express.static(clientDir, { index: false }));
-  app.get(['/', '/*splat'], (_request, response) => {
-    response.set('Cache-Control', 'no-cache').sendFile(path.join(clientDir, 'index.html'));
+  app.get(['/', '/*splat'], async (_request, response) => {
+    const page = await readFile(path.join(clientDir, 'index.html'), 'utf8').catch(() => notBuilt);
+    response
+      .set('Cache-Control', 'no-cache')
+      .type('html')
+      .send(hasDemoPeople(db) ? page.replace('</head>', `${demoMark}</head>`) : page);
   });
 }

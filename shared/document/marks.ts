@@ -24,5 +24,5 @@ export const marks = {
 } as const satisfies Record<string, z.ZodObject>;
 
 export type MarkKind = keyof typeof marks;
-export type WordMark = z.infer<(typeof marks)['word']>;
+
 export type DoubtMark = z.infer<(typeof marks)['doubt']>;

@@ -13,7 +13,6 @@ export const readingWord = z.object({
 export type ReadingWord = z.infer<typeof readingWord>;
 
 export const readingBlock = z.object({ kind: z.string(), box: zone });
-export type ReadingBlock = z.infer<typeof readingBlock>;
 
 const row = z.tuple([z.number(), z.number(), z.number()]);
 /** Takes a point of the page image as read to the source image as delivered: [[a, b, c], [d, e, f]]. */

@@ -58,3 +58,6 @@ export const administrators = (db: Connection): number =>
     .get()?.count ?? 0;
 
 export const hasUsers = (db: Connection): boolean => db.select({ id: user.id }).from(user).limit(1).get() !== undefined;
+
+/** The demo's people all have addresses under one name that nobody can own (RFC 2606). */
+export const hasDemoPeople = (db: Connection): boolean => findUserByEmail(db, 'reader@benchleaf.example') !== undefined;

@@ -1,14 +1,4 @@
-export { type PageRow, changePage, findPage, newestReading, pageRows, pageSummary } from './queries.ts';
+export { type PageRow, changePage, findPage, pageSummary } from './queries.ts';
 export { pageRoutes } from './routes.ts';
-export {
-  addPagesBy,
-  attend,
-  existingPage,
-  placeToRead,
-  readAgain,
-  relabel,
-  restingState,
-  steerReading,
-  tellPage,
-} from './service.ts';
+export { addPagesBy, existingPage, restingState, tellPage } from './service.ts';
 export { drawStep, failPage, incomingFile } from './steps.ts';

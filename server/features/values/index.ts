@@ -1,3 +1,1 @@
-export { quantityRows } from './queries.ts';
 export { valueRoutes } from './routes.ts';
-export { createQuantity } from './service.ts';
