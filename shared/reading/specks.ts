@@ -4,6 +4,8 @@ import type { ReadingWord } from './reading.ts';
 /** Below this confidence one or two letters on their own are more likely a speck than print. */
 const speckBelow = 45;
 const signsOnly = /^[^\p{L}\p{N}]+$/u;
+/** The marker of a step, with its letter c read as a sign. */
+const bentMarker = /^\(?[¢©][.,)]$/;
 /** Signs that print does set on their own. */
 const plainSigns = /^([–—&=+±%#*"”.]|\.{2,})$/u;
 
@@ -23,6 +25,7 @@ export function withoutSpecks(words: readonly ReadingWord[]): ReadingWord[] {
 }
 
 function isSpeck({ text, confidence, box: [, , width, height] }: ReadingWord, letter: number): boolean {
+  if (bentMarker.test(text)) return false;
   if (signsOnly.test(text)) return confidence < 85 || !plainSigns.test(text);
   const isOddSize = height < letter * 0.45 || height > letter * 2.2 || (text.length > 2 && width < letter * 0.3);
   return isOddSize && confidence < 70;
