@@ -98,9 +98,14 @@ const pictureOperators = new Set<number>([
   OPS.paintImageMaskXObject,
 ]);
 
+/** Operators that set the scene and draw nothing: what is left of a page whose only picture was too large to decode. */
+const bareOperators = new Set<number>([OPS.save, OPS.restore, OPS.transform, OPS.dependency, OPS.beginGroup, OPS.endGroup]);
+
+/** Whether a page that came out blank should not have: it paints a picture, or sets out to and then does not. */
 async function holdsPictures(page: PDFPageProxy): Promise<boolean> {
   const { fnArray } = await page.getOperatorList();
-  return fnArray.length <= 2 || fnArray.some((operator) => pictureOperators.has(operator));
+  const isHollow = fnArray.length > 0 && fnArray.every((operator) => bareOperators.has(operator));
+  return isHollow || fnArray.some((operator) => pictureOperators.has(operator));
 }
 
 /** Writes the picture as JPEG, grey unless its colours carry something; tells its size and how much it varies. */
