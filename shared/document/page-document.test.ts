@@ -7,7 +7,7 @@ import { countDoubts, placedTexts, quantitiesIn, textOf } from './text-of.ts';
 import { tablesOf } from './tables.ts';
 import { upgradeDocument } from './upgrades.ts';
 import { between, moveZones } from './zones.ts';
-import { doc, everyKind, paragraph, partsTable, text, word } from '../../tests/helpers/documents.ts';
+import { doc, everyKind, paragraph, partsTable, text, word } from './documents.fixture.ts';
 
 const read = (json: unknown) => {
   const result = readDocument(json);

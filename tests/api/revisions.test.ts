@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { type Caller, type TestServer, eventually, startTestServer } from '../helpers/server.ts';
-import { doc, doubtful, everyKind, paragraph, partsTable, text, word } from '../helpers/documents.ts';
+import { doc, doubtful, everyKind, paragraph, partsTable, text, word } from '#shared/document/documents.fixture.ts';
 import { drawSheet, sheet } from '../helpers/scans.ts';
 
 let server: TestServer;

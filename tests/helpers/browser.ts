@@ -1,8 +1,6 @@
 import { existsSync, mkdirSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import { type Browser, type BrowserContext, type Page, chromium } from 'playwright-core';
-import { addressOf, password } from './server.ts';
-import type { Role } from '#shared/access/roles.ts';
 
 const candidates = [
   process.env['CHROMIUM'],
@@ -26,17 +24,15 @@ export async function openBrowser(): Promise<Browser> {
   return chromium.launch({ executablePath, args: flags });
 }
 
+type Person = { email: string; password: string };
+
 /** A window of one person, signed in through the sign-in screen. */
-export async function signedIn(
-  browser: Browser,
-  url: string,
-  role: Role,
-): Promise<{ page: Page; context: BrowserContext }> {
+export async function signedIn(browser: Browser, url: string, { email, password }: Person): Promise<{ page: Page; context: BrowserContext }> {
   const context = await browser.newContext({ viewport: { width: 1440, height: 900 }, reducedMotion: 'reduce' });
   const page = await context.newPage();
   page.setDefaultTimeout(30_000);
   await page.goto(`${url}/sign-in`);
-  await page.getByLabel('E-mail').fill(addressOf(role));
+  await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password', { exact: true }).fill(password);
   await page.getByRole('button', { name: 'Sign in' }).click();
   await page.waitForURL((at) => !at.pathname.startsWith('/sign-in'));

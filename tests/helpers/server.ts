@@ -3,6 +3,7 @@ import os from 'node:os';
 import path from 'node:path';
 import request from 'supertest';
 import { readConfig } from '#server/config/config.ts';
+import { seedWhenNew } from '#server/demo/seed.ts';
 import { type Running, startServer } from '#server/start.ts';
 import { type Role, roles } from '#shared/access/roles.ts';
 import { projectRoot } from '#server/db/database.ts';
@@ -50,6 +51,27 @@ export async function startTestServer({
     },
   };
 }
+
+/** A server with the demo on it, as a first start makes it, its manuals being read. */
+export async function startDemoServer(): Promise<Omit<TestServer, 'as'>> {
+  const dataDir = mkdtempSync(path.join(os.tmpdir(), 'benchleaf-demo-'));
+  const env = { NODE_ENV: 'test', PORT: '0', DATA_DIR: dataDir, SEED: 'demo', LOG_LEVEL: 'silent', RECOGNITION_WORKERS: '1' };
+  const running = await startServer(readConfig(env), workerScript);
+  await seedWhenNew(running);
+  return {
+    ...running,
+    dataDir,
+    async stop() {
+      await running.stop();
+      rmSync(dataDir, { recursive: true, force: true });
+    },
+  };
+}
+
+export const demoPerson = (name: 'reader' | 'technician' | 'editor' | 'archivist' | 'admin') => ({
+  email: `${name}@benchleaf.example`,
+  password: 'benchleaf-demo',
+});
 
 export type Reply = { status: number; body: any; text: string; headers: Record<string, string> };
 type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';

@@ -16,7 +16,7 @@ export const readStep = (tools: Tools): HeavyStep => ({
   began(job) {
     const page = findPage(tools.db, job.subjectId);
     if (page === undefined) return;
-    if (page.state === 'waiting' || page.state === 'failed') changePage(tools.db, page.id, { state: 'reading' });
+    if (page.state !== 'corrected' && page.state !== 'proofed') changePage(tools.db, page.id, { state: 'reading' });
     tellPage(tools, page.id);
   },
   async prepare(job): Promise<ReadInput | null> {

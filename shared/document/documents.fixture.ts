@@ -1,4 +1,4 @@
-import type { DocNode } from '#shared/document/define-block.ts';
+import type { DocNode } from './define-block.ts';
 
 export const text = (words: string, ...marks: string[]): DocNode =>
   marks.length === 0
