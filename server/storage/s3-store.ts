@@ -13,7 +13,11 @@ type Bucket = { bucket: string; endpoint: string | null; region: string };
  * get one from a folder beside the database, which can be emptied at any time.
  */
 export function s3Store({ bucket, endpoint, region }: Bucket, cacheDir: string): FileStore {
-  const client = new S3Client({ region, ...(endpoint === null ? {} : { endpoint, forcePathStyle: true }) });
+  // Checksums as trailers of a chunked body are the SDK's default, and many buckets of other makes refuse them.
+  const checksums = { requestChecksumCalculation: 'WHEN_REQUIRED', responseChecksumValidation: 'WHEN_REQUIRED' } as const;
+  const client = new S3Client({
+    region,
+    ...checksums, ...(endpoint === null ? {} : { endpoint, forcePathStyle: true }) });
   const fetchObject = async (key: string): Promise<Readable> => {
     const { Body } = await client.send(new GetObjectCommand({ Bucket: bucket, Key: key }));
     if (Body === undefined) throw new Error(`The bucket holds nothing under ${key}.`);
