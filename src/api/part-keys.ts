@@ -1,0 +1,1 @@
+export const partKeys = { ofManual: (manualId: string) => ['parts', manualId] as const };

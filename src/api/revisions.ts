@@ -1,0 +1,34 @@
+import { mutationOptions, type QueryClient, queryOptions } from '@tanstack/react-query';
+import * as api from '#shared/api/revisions.ts';
+import { call } from './call.ts';
+import { everyItem } from './every-item.ts';
+import { pageKeys } from './page-keys.ts';
+
+export const revisionsOfPage = (pageId: string) =>
+  queryOptions({
+    queryKey: pageKeys.revisions(pageId),
+    queryFn: ({ signal }) => everyItem((query) => call(api.listRevisions, { params: { pageId }, query, signal })),
+  });
+
+/** A revision never changes, so it is fetched once. */
+export const oneRevision = (pageId: string, number: number) =>
+  queryOptions({
+    queryKey: pageKeys.revision(pageId, number),
+    queryFn: ({ signal }) => call(api.getRevision, { params: { pageId, number }, signal }),
+    staleTime: Infinity,
+  });
+
+type Edit = { baseRevision: number; document: Record<string, unknown>; note?: string };
+
+export const saveDocument = (client: QueryClient, pageId: string) =>
+  mutationOptions({
+    mutationFn: (body: Edit) => call(api.saveDocument, { params: { pageId }, body }),
+    onSuccess: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });
+
+export const restoreRevision = (client: QueryClient, pageId: string) =>
+  mutationOptions({
+    mutationFn: ({ number, note }: { number: number; note?: string }) =>
+      call(api.restoreRevision, { params: { pageId, number }, body: note === undefined ? {} : { note } }),
+    onSuccess: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });

@@ -1,0 +1,1 @@
+export const sourceKeys = { ofManual: (manualId: string) => ['sources', manualId] as const };

@@ -1,0 +1,152 @@
+import type { ReactNode } from 'react';
+import type { LiveValue, Sensitivity } from '#shared/calc/describe-value.ts';
+import { formatQuantity } from '#shared/units/format-quantity.ts';
+import { StateWord } from '#src/ui/state-word.tsx';
+import { filledIn } from './filled-in.ts';
+import { type LiveQuantity, useSetting } from './live-values.tsx';
+import type { PlacedValue } from './placed-value.ts';
+
+type Props = { live: LiveQuantity; placed: PlacedValue };
+
+/** All there is to say of one value: where it comes from, what was printed, whether that is proved, how far it may be off. */
+export function ValueDetails({ live, placed }: Props) {
+  const { quantity, value, store } = live;
+  useSetting();
+  const deeper = store.evaluate({ tolerances: true, sensitivities: true }).values[quantity.symbol];
+  return (
+    <div className="value-details">
+      <h2 className="font-serif text-lead font-semibold">{quantity.label === '' ? quantity.symbol : quantity.label}</h2>
+      <dl>
+        <Line label="Symbol">
+          <code className="figures">{quantity.symbol}</code>, {kindWords[quantity.kind]}
+        </Line>
+        <ComesFrom live={live} />
+        <Line label="As printed">
+          <span className="figures">{placed.printed}</span>
+        </Line>
+        <Line label="As set">
+          {value.problem === undefined ? (
+            <span className="figures text-signal">{placed.asSet}</span>
+          ) : (
+            <>
+              <StateWord tone="alarm" shape="cross">
+                Unavailable
+              </StateWord>
+              <p className="text-alarm">{value.problem.message}</p>
+            </>
+          )}
+        </Line>
+        <Line label="At home">
+          <AtHome live={live} />
+        </Line>
+        <Bounds quantity={quantity} value={deeper} />
+      </dl>
+      <Sensitivities
+        of={deeper?.sensitivity}
+        unit={quantity.unit}
+        unitOf={(symbol) => store.read(symbol)?.unit ?? ''}
+      />
+    </div>
+  );
+}
+
+function ComesFrom({ live: { quantity, store } }: { live: LiveQuantity }) {
+  const numbers = filledIn(store.program, quantity.symbol, (symbol) => store.read(symbol)?.text || 'unavailable');
+  if (quantity.expression === undefined) return null;
+  return (
+    <Line label="Comes from">
+      <code className="figures block break-words">{quantity.expression}</code>
+      {numbers === undefined ? null : <code className="figures block break-words text-pencil">= {numbers}</code>}
+    </Line>
+  );
+}
+
+function Bounds({
+  quantity: { limits, unit },
+  value,
+}: {
+  quantity: LiveQuantity['quantity'];
+  value: LiveValue | undefined;
+}) {
+  return (
+    <>
+      {value?.low === undefined || value.high === undefined ? null : (
+        <Line label="With tolerances">
+          <span className="figures">{`${formatQuantity(value.low, '')} to ${formatQuantity(value.high, unit)}`}</span>
+        </Line>
+      )}
+      {limits === undefined ? null : (
+        <Line label="Limits">
+          <span className="figures">{limitsText(limits, unit)}</span>
+          {value?.limitsBroken === true ? (
+            <StateWord tone="alarm" shape="cross" className="ml-2">
+              outside
+            </StateWord>
+          ) : null}
+        </Line>
+      )}
+    </>
+  );
+}
+
+const kindWords = { input: 'an input: you set it', constant: 'a constant', derived: 'worked out from others' } as const;
+
+const Line = ({ label, children }: { label: string; children: ReactNode }) => (
+  <div className="value-line">
+    <dt>{label}</dt>
+    <dd>{children}</dd>
+  </div>
+);
+
+function AtHome({ live: { quantity, store } }: { live: LiveQuantity }) {
+  const item = store.proof.items.find(({ symbol }) => symbol === quantity.symbol);
+  const home = store.home[quantity.symbol];
+  if (item === undefined) return <span className="figures">{home?.text === '' ? 'no value' : home?.text}</span>;
+  if (item.agrees) {
+    return (
+      <StateWord tone="good" shape="tick">
+        comes out as printed
+      </StateWord>
+    );
+  }
+  return (
+    <StateWord tone="alarm" shape="cross">
+      {item.computed === ''
+        ? (item.problem?.message ?? 'has no value')
+        : `comes out as ${item.computed}, not as printed`}
+    </StateWord>
+  );
+}
+
+type SensitivityProps = {
+  of: Record<string, Sensitivity> | undefined;
+  unit: string;
+  unitOf: (symbol: string) => string;
+};
+
+function Sensitivities({ of, unit, unitOf }: SensitivityProps) {
+  const entries = Object.entries(of ?? {}).filter(([, { absolute }]) => absolute !== 0);
+  if (entries.length === 0) return null;
+  return (
+    <div className="mt-3">
+      <h3 className="cell-label">Moves with</h3>
+      <ul>
+        {entries.map(([symbol, { absolute, ppm }]) => (
+          <li key={symbol}>
+            <code className="figures">{symbol}</code>:{' '}
+            <span className="figures">{formatQuantity(absolute, unit, { significant: 4 })}</span> for each{' '}
+            {unitOf(symbol) === '' ? 'one' : unitOf(symbol)}
+            {ppm === null ? '' : `, ${formatQuantity(ppm, '', { significant: 3 })} ppm per ppm`}
+          </li>
+        ))}
+      </ul>
+    </div>
+  );
+}
+
+function limitsText({ low, high }: { low?: number | undefined; high?: number | undefined }, unit: string): string {
+  if (low === undefined) return `up to ${formatQuantity(high ?? NaN, unit)}`;
+  return high === undefined
+    ? `from ${formatQuantity(low, unit)}`
+    : `${formatQuantity(low, '')} to ${formatQuantity(high, unit)}`;
+}

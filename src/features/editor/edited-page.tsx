@@ -1,0 +1,166 @@
+import type { Editor } from '@tiptap/core';
+import { EditorContent, useEditorState } from '@tiptap/react';
+import { type ReactNode, useDeferredValue, useEffect, useMemo, useState } from 'react';
+import type { Page } from '#shared/api/pages.ts';
+import type { DocNode } from '#shared/document/define-block.ts';
+import type { LookContext } from '#src/blocks/look.ts';
+import { toast } from '#src/ui/toast.ts';
+import { PageTitle } from '#src/scan/page-title.tsx';
+import { boxesOf, type ScanBox } from '#src/scan/scan-boxes.ts';
+import { ScanViewer } from '#src/scan/scan-viewer.tsx';
+import { Spine, ticksOf } from '#src/scan/spine.tsx';
+import { TwoLeaves } from '#src/scan/two-leaves.tsx';
+import type { PageLink } from '#src/scan/use-page-link.ts';
+import { wordsAt } from '#src/scan/words-at.ts';
+import { doubtsOf } from './doubts.ts';
+import { DoubtStrip } from './doubt-strip.tsx';
+import { positionOfZone, zoneAtCaret } from './find-zone.ts';
+import { type DeedName, deedOf } from './keys.ts';
+import { KeysDialog } from './keys-dialog.tsx';
+import { LeaveDialog } from './leave-dialog.tsx';
+import { MakeLivePanel } from './make-live-panel.tsx';
+import { MergeDialog } from './merge-dialog.tsx';
+import { PageNotices } from './page-notices.tsx';
+import { PartStrip } from './part-strip.tsx';
+import { type PrintedNumber, printedNumber } from './printed-number.ts';
+import { SaveBar } from './save-bar.tsx';
+import { Toolbar } from './toolbar.tsx';
+import { useDoubtWalk } from './use-doubt-walk.ts';
+import { useDraft } from './use-draft.ts';
+import { usePageEditor } from './use-page-editor.ts';
+import { useSaving } from './use-saving.ts';
+import '#src/blocks/page.css';
+
+type Props = {
+  page: Page;
+  document: DocNode;
+  context: LookContext;
+  link: PageLink;
+  scan: { pageId: string; version: string; size: { width: number; height: number } | null; label: string };
+  settingBar: ReactNode;
+  links: (isDirty: boolean) => ReactNode;
+  addressOf: (pageId: string) => string;
+};
+
+export function EditedPage({ page, document, context, link, scan, settingBar, links, addressOf }: Props) {
+  const editor = usePageEditor({ document, context, label: 'Page text' });
+  const saving = useSaving(editor, page);
+  const walk = useDoubtWalk(editor, link.showOnScan);
+  const [note, setNote] = useState('');
+  const [isKeysOpen, setKeysOpen] = useState(false);
+  const [live, setLive] = useState<PrintedNumber | string | null>(null);
+  const { boxes, shown, doubtCount } = usePlaces(editor);
+  const goTo = useGoTo(editor, link);
+  useDraft({ editor, pageId: page.id, baseRevision: saving.base.revision, isDirty: () => saving.isDirty });
+  useCaretLight(editor, link.setActive);
+  const save = async (): Promise<boolean> => {
+    if (!saving.isDirty) toast('Nothing has changed since the last revision.');
+    const isSaved = saving.isDirty && (await saving.save(note));
+    if (isSaved) setNote('');
+    return isSaved;
+  };
+  const deeds: Record<DeedName, () => void> = {
+    next: () => walk.goBeside(1),
+    previous: () => walk.goBeside(-1),
+    settle: walk.settle,
+    live: () => setLive(printedNumber(editor)),
+    save: () => void save(),
+    help: () => setKeysOpen(true),
+  };
+  useKeys(deeds);
+  const onScan = { boxes, active: link.active, onHover: link.setActive, focusBox: link.focusBox };
+  const ticks = ticksOf(boxes, (key) => wordsAt(shown, key));
+  return (
+    <div className="desk">
+      <PageTitle page={page} doubts={doubtCount} addressOf={addressOf}>
+        {links(saving.isDirty)}
+      </PageTitle>
+      {settingBar}
+      <PageNotices page={page} saving={saving} />
+      <TwoLeaves
+        scan={<ScanViewer {...scan} {...onScan} onPick={(key) => goTo(key, 'text')} />}
+        spine={
+          <Spine
+            ticks={ticks}
+            height={page.height}
+            active={link.active}
+            onGo={(key) => goTo(key, 'both')}
+            onHover={link.setActive}
+          />
+        }
+        page={
+          <>
+            <SaveBar {...saving} note={note} onNote={setNote} onSave={deeds.save} />
+            <Toolbar editor={editor} onMakeLive={deeds.live} />
+            <h2 className="sr-only">Page text</h2>
+            <div ref={link.leaf} className="leaf-scroll" onPointerOver={link.onTextHover}>
+              <EditorContent editor={editor} className="page-sheet" />
+            </div>
+          </>
+        }
+        margin={
+          <>
+            {live === null ? null : (
+              <MakeLivePanel {...{ editor, page }} key={keyOf(live)} found={live} onClose={() => setLive(null)} />
+            )}
+            <DoubtStrip editor={editor} walk={walk} onKeys={deeds.help} />
+            <PartStrip editor={editor} />
+          </>
+        }
+      />
+      <KeysDialog isOpen={isKeysOpen} onOpenChange={setKeysOpen} />
+      <LeaveDialog isDirty={saving.isDirty} onSave={save} />
+      <MergeDialog editor={editor} saving={saving} note={note} />
+    </div>
+  );
+}
+
+const keyOf = (live: PrintedNumber | string): string => (typeof live === 'string' ? live : String(live.from));
+
+/** To the text of a zone, with the caret in it, and if wished to its place on the scan. */
+function useGoTo(editor: Editor, { showOnScan, showInText }: PageLink): (key: string, side: 'both' | 'text') => void {
+  return (key, side) => {
+    if (side === 'both') showOnScan(key);
+    showInText(key);
+    const position = positionOfZone(editor.state.doc, key);
+    if (position === undefined) return;
+    editor.chain().focus(undefined, { scrollIntoView: false }).setTextSelection(position).run();
+  };
+}
+
+/** What stands where, a little behind the typing: the boxes over the scan and the ticks of the spine. */
+function usePlaces(editor: Editor): { boxes: ScanBox[]; shown: DocNode; doubtCount: number } {
+  const doc = useEditorState({ editor, selector: ({ editor: now }) => now.state.doc, equalityFn: (a, b) => a === b });
+  const later = useDeferredValue(doc);
+  return useMemo(() => {
+    const shown = later.toJSON() as DocNode;
+    return { shown, boxes: boxesOf(shown), doubtCount: doubtsOf(later).length };
+  }, [later]);
+}
+
+/** Moving the caret moves the light on the scan. */
+function useCaretLight(editor: Editor, light: (key: string | null) => void): void {
+  useEffect(() => {
+    const follow = (): void => {
+      if (editor.isFocused) light(zoneAtCaret(editor));
+    };
+    editor.on('selectionUpdate', follow);
+    return () => {
+      editor.off('selectionUpdate', follow);
+    };
+  }, [editor, light]);
+}
+
+function useKeys(deeds: Record<DeedName, () => void>): void {
+  useEffect(() => {
+    const onKeyDown = (event: KeyboardEvent): void => {
+      const deed = deedOf(event);
+      if (deed === null || event.defaultPrevented) return;
+      event.preventDefault();
+      deeds[deed]();
+    };
+    // Before the editor sees them, so that Alt Enter does not also break a line.
+    window.addEventListener('keydown', onKeyDown, { capture: true });
+    return () => window.removeEventListener('keydown', onKeyDown, { capture: true });
+  });
+}

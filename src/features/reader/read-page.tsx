@@ -1,0 +1,82 @@
+import { useMemo } from 'react';
+import type { Page } from '#shared/api/pages.ts';
+import type { DocNode, Zone } from '#shared/document/define-block.ts';
+import { imageOf } from '#src/api/pages.ts';
+import { zoneKey } from '#src/blocks/look.ts';
+import { PageView } from '#src/blocks/page-view.tsx';
+import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
+import { boxesOf, type ScanBox } from '#src/scan/scan-boxes.ts';
+import { ScanViewer } from '#src/scan/scan-viewer.tsx';
+import { Spine, ticksOf } from '#src/scan/spine.tsx';
+import { TwoLeaves } from '#src/scan/two-leaves.tsx';
+import { usePageLink } from '#src/scan/use-page-link.ts';
+import { useScanVersion } from '#src/scan/use-scan-version.ts';
+import { wordsAt } from '#src/scan/words-at.ts';
+
+type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: readonly Zone[]; query: string };
+
+/** A page that is read: its text beside its scan, each showing where the other stands. */
+export function ReadPage({ page, hits, query }: Props) {
+  useAttention(page);
+  const version = useScanVersion(page);
+  const document = page.document as DocNode | null;
+  const link = usePageLink(hits[0] ?? null);
+  const context = useMemo(
+    () => ({ imageOf: (zone: Zone) => imageOf(page.id, { zone, v: version }) }),
+    [page.id, version],
+  );
+  const boxes = useMemo(() => (document === null ? [] : boxesOf(document)), [document]);
+  const shown = useMemo(
+    () => [...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
+    [boxes, hits],
+  );
+  const ticks = useMemo(() => ticksOf(boxes, (key) => wordsAt(document, key)), [boxes, document]);
+  const size =
+    page.hasImage && page.width !== null && page.height !== null ? { width: page.width, height: page.height } : null;
+  return (
+    <TwoLeaves
+      scan={
+        <ScanViewer
+          pageId={page.id}
+          version={version}
+          size={size}
+          label={`Scan of page ${page.label}`}
+          boxes={shown}
+          active={link.active}
+          onHover={link.setActive}
+          onPick={(key) => void link.showInText(key)}
+          focusBox={link.focusBox}
+        />
+      }
+      spine={
+        <Spine
+          ticks={ticks}
+          height={page.height}
+          active={link.active}
+          onGo={(key) => void link.goTo(key)}
+          onHover={link.setActive}
+        />
+      }
+      page={
+        <div
+          ref={link.leaf}
+          role="region"
+          aria-label="Page text"
+          // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- it scrolls, so the keys must reach it
+          tabIndex={0}
+          className="leaf-scroll"
+          onPointerOver={link.onTextHover}
+        >
+          <div className="page-sheet">
+            <h2 className="sr-only">Page text</h2>
+            {document === null ? (
+              <PageWaiting page={page} />
+            ) : (
+              <PageView document={document} context={context} query={query} />
+            )}
+          </div>
+        </div>
+      }
+    />
+  );
+}

@@ -1,0 +1,159 @@
+import { type KeyboardEvent, memo, useEffect, useEffectEvent, useMemo, useRef, useState } from 'react';
+import type { Zone } from '#shared/document/define-block.ts';
+import { Button } from '#src/ui/button.tsx';
+import { Notice } from '#src/ui/notice.tsx';
+import { openScan, type OpenScan, type ScanPlace } from './open-scan.ts';
+import { boxAt, type ScanBox } from './scan-boxes.ts';
+import './scan.css';
+
+type Props = {
+  pageId: string;
+  /** Changes when the picture may have. */
+  version: string;
+  /** Null while the page has no picture yet. */
+  size: { width: number; height: number } | null;
+  label: string;
+  boxes: readonly ScanBox[];
+  active: string | null;
+  onHover?: (key: string | null) => void;
+  onPick?: (key: string) => void;
+  /** Brought into sight, enlarged, whenever it changes to another. */
+  focusBox?: Zone | null;
+};
+
+const zoomStep = 1.4;
+const panStep = 0.15;
+
+/** The scan of a page: deep zoom, and the zones of the page drawn over it. */
+export function ScanViewer({ pageId, version, size, label, boxes, active, onHover, onPick, focusBox = null }: Props) {
+  const frame = useRef<HTMLDivElement>(null);
+  const overlay = useRef<SVGGElement>(null);
+  const scan = useRef<OpenScan | null>(null);
+  const [isOpen, setOpen] = useState(false);
+  const [hasFailed, setFailed] = useState(false);
+  const onMove = useEffectEvent(({ x, y, scale }: ScanPlace) =>
+    overlay.current?.setAttribute('transform', `translate(${x} ${y}) scale(${scale})`),
+  );
+  const hover = useEffectEvent((point: { x: number; y: number } | null) =>
+    onHover?.(point === null ? null : (boxAt(boxes, point)?.key ?? null)),
+  );
+  const pick = useEffectEvent((point: { x: number; y: number }) => {
+    const box = boxAt(boxes, point);
+    if (box !== null) onPick?.(box.key);
+  });
+  const { width, height } = size ?? { width: 0, height: 0 };
+  useEffect(() => {
+    if (frame.current === null || width === 0) return;
+    setFailed(false);
+    const opened = openScan(
+      frame.current,
+      { pageId, version, width, height },
+      { onMove, onHover: hover, onPick: pick, onProblem: () => setFailed(true), onOpen: () => setOpen(true) },
+    );
+    scan.current = opened;
+    return () => {
+      scan.current = null;
+      setOpen(false);
+      opened.close();
+    };
+  }, [pageId, version, width, height]);
+  const focusKey = focusBox?.join();
+  useEffect(() => {
+    if (isOpen && focusKey !== undefined) scan.current?.lookAt(focusKey.split(',').map(Number) as Zone);
+  }, [isOpen, focusKey]);
+  if (size === null) return <NoPicture />;
+  return (
+    <section aria-label={label} className="scan">
+      <ScanButtons scan={scan} />
+      {hasFailed ? (
+        <Notice kind="doubt" title="Part of this picture could not be fetched.">
+          It is tried again when you zoom or come back to the page.
+        </Notice>
+      ) : null}
+      {/* eslint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- the keys move the picture, as they would in a map */}
+      <div
+        role="application"
+        aria-label={`${label}. Plus and minus zoom, the arrow keys move, 0 shows the whole page.`}
+        // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- a picture that can be moved by keys has to be reachable
+        tabIndex={0}
+        className="scan-frame"
+        onKeyDown={(event) => onKey(event, scan.current)}
+      >
+        <div ref={frame} className="scan-picture" />
+        <svg className="scan-overlay" aria-hidden="true">
+          <g ref={overlay}>
+            <Boxes boxes={boxes} />
+            <ActiveBox boxes={boxes} active={active} />
+          </g>
+        </svg>
+      </div>
+    </section>
+  );
+}
+
+function ScanButtons({ scan }: { scan: { current: OpenScan | null } }) {
+  return (
+    <div role="group" aria-label="Scan" className="leaf-tools screen-only">
+      <Button onClick={() => scan.current?.zoomBy(zoomStep)}>Closer</Button>
+      <Button onClick={() => scan.current?.zoomBy(1 / zoomStep)}>Further off</Button>
+      <Button onClick={() => scan.current?.fitWidth()}>Fit width</Button>
+      <Button onClick={() => scan.current?.fitPage()}>Whole page</Button>
+    </div>
+  );
+}
+
+const Boxes = memo(function Boxes({ boxes }: { boxes: readonly ScanBox[] }) {
+  return boxes.map(({ key, box: [x, y, width, height], kind }) => (
+    <rect
+      key={`${kind}-${key}`}
+      data-kind={kind}
+      x={x}
+      y={y}
+      width={width}
+      height={height}
+      vectorEffect="non-scaling-stroke"
+    />
+  ));
+});
+
+function ActiveBox({ boxes, active }: { boxes: readonly ScanBox[]; active: string | null }) {
+  const found = useMemo(() => boxes.find(({ key }) => key === active), [boxes, active]);
+  if (found === undefined) return null;
+  const [x, y, width, height] = found.box;
+  return (
+    <rect
+      data-kind="active"
+      x={x - 4}
+      y={y - 4}
+      width={width + 8}
+      height={height + 8}
+      vectorEffect="non-scaling-stroke"
+    />
+  );
+}
+
+const moves: Record<string, (scan: OpenScan) => void> = {
+  '+': (scan) => scan.zoomBy(zoomStep),
+  '=': (scan) => scan.zoomBy(zoomStep),
+  '-': (scan) => scan.zoomBy(1 / zoomStep),
+  '0': (scan) => scan.fitPage(),
+  ArrowLeft: (scan) => scan.panBy(-panStep, 0),
+  ArrowRight: (scan) => scan.panBy(panStep, 0),
+  ArrowUp: (scan) => scan.panBy(0, -panStep),
+  ArrowDown: (scan) => scan.panBy(0, panStep),
+};
+
+function onKey(event: KeyboardEvent, scan: OpenScan | null): void {
+  const move = moves[event.key];
+  if (move === undefined || scan === null || event.ctrlKey || event.metaKey || event.altKey) return;
+  event.preventDefault();
+  move(scan);
+}
+
+const NoPicture = () => (
+  <section aria-label="Scan" className="scan">
+    <div className="scan-frame scan-empty">
+      <p>The picture of this page has not been drawn yet. It appears here by itself.</p>
+    </div>
+  </section>
+);
