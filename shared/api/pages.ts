@@ -17,7 +17,8 @@ export const pageSummary = z.object({
   doubtCount: z.number().int(),
   revision: z.number().int(),
   problem: z.string().nullable(),
-  hasImage: z.boolean(),
+  /** Changes with the page image, and with nothing else; null until there is one. Goes into the image's address as `v`. */
+  imageVersion: z.string().nullable(),
 });
 export type PageSummary = z.infer<typeof pageSummary>;
 

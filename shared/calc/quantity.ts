@@ -36,7 +36,6 @@ export const quantityDefinition = z
   });
 
 export type QuantityDefinition = z.infer<typeof quantityDefinition>;
-export type QuantityKind = QuantityDefinition['kind'];
 
 type Rule = { path: string; message: string; breaks: (quantity: QuantityShape) => boolean };
 type QuantityShape = {

@@ -13,7 +13,7 @@ const page: PageSummary = {
   doubtCount: 0,
   revision: 0,
   problem: null,
-  hasImage: true,
+  imageVersion: 'drawn',
 };
 
 describe('a live event', () => {

@@ -7,8 +7,6 @@ import { addressOf, call } from './call.ts';
 import { everyItem } from './every-item.ts';
 import { pageKeys } from './page-keys.ts';
 
-export { pageKeys } from './page-keys.ts';
-
 export const pagesOfManual = (manualId: string) =>
   queryOptions({
     queryKey: pageKeys.ofManual(manualId),
@@ -20,33 +18,6 @@ export const onePage = (pageId: string) =>
     queryKey: pageKeys.one(pageId),
     queryFn: ({ signal }) => call(api.getPage, { params: { pageId }, signal }),
   });
-
-export const readingOfPage = (pageId: string) =>
-  queryOptions({
-    queryKey: pageKeys.reading(pageId),
-    queryFn: ({ signal }) => call(api.getPageReading, { params: { pageId }, signal }),
-  });
-
-export const textOfPage = (pageId: string) =>
-  queryOptions({
-    queryKey: pageKeys.text(pageId),
-    queryFn: ({ signal }) => call(api.getPageText, { params: { pageId }, signal }),
-  });
-
-export const tablesOfPage = (pageId: string) =>
-  queryOptions({
-    queryKey: pageKeys.tables(pageId),
-    queryFn: ({ signal }) => call(api.getPageTables, { params: { pageId }, signal }),
-  });
-
-/** Changes whenever the picture of a page may have: after drawing, and after each reading. */
-export const imageVersion = ({
-  state,
-  revision,
-  hasImage,
-  confidence,
-}: Pick<PageSummary, 'state' | 'revision' | 'hasImage' | 'confidence'>): string =>
-  [state, revision, hasImage ? 1 : 0, confidence === null ? 0 : Math.round(confidence * 100)].join('-');
 
 type Picture = { width?: number; zone?: Zone; v?: string };
 

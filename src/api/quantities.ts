@@ -6,8 +6,6 @@ import { everyItem } from './every-item.ts';
 import { manualKeys } from './manuals.ts';
 import { quantityKeys } from './quantity-keys.ts';
 
-export { quantityKeys } from './quantity-keys.ts';
-
 export type Inputs = Record<string, number | string>;
 export type Pin = { symbol: string; value: number | string; solveFor: string };
 

@@ -27,7 +27,11 @@ export async function openBrowser(): Promise<Browser> {
 type Person = { email: string; password: string };
 
 /** A window of one person, signed in through the sign-in screen. */
-export async function signedIn(browser: Browser, url: string, { email, password }: Person): Promise<{ page: Page; context: BrowserContext }> {
+export async function signedIn(
+  browser: Browser,
+  url: string,
+  { email, password }: Person,
+): Promise<{ page: Page; context: BrowserContext }> {
   const context = await browser.newContext({ viewport: { width: 1440, height: 900 }, reducedMotion: 'reduce' });
   const page = await context.newPage();
   page.setDefaultTimeout(30_000);

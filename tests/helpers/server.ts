@@ -55,7 +55,14 @@ export async function startTestServer({
 /** A server with the demo on it, as a first start makes it, its manuals being read. */
 export async function startDemoServer(): Promise<Omit<TestServer, 'as'>> {
   const dataDir = mkdtempSync(path.join(os.tmpdir(), 'benchleaf-demo-'));
-  const env = { NODE_ENV: 'test', PORT: '0', DATA_DIR: dataDir, SEED: 'demo', LOG_LEVEL: 'silent', RECOGNITION_WORKERS: '1' };
+  const env = {
+    NODE_ENV: 'test',
+    PORT: '0',
+    DATA_DIR: dataDir,
+    SEED: 'demo',
+    LOG_LEVEL: 'silent',
+    RECOGNITION_WORKERS: '1',
+  };
   const running = await startServer(readConfig(env), workerScript);
   await seedWhenNew(running);
   return {
@@ -95,7 +102,7 @@ export class Caller {
 
   async send(method: Method, at: string, body?: object): Promise<Reply> {
     const call = request(this.url)[method](at).set('Cookie', this.cookie);
-    return (await (body === undefined ? call : call.send(body))) as unknown as Reply;
+    return await (body === undefined ? call : call.send(body));
   }
 
   get = (at: string): Promise<Reply> => this.send('get', at);
@@ -107,7 +114,7 @@ export class Caller {
   async upload(manualId: string, files: { name: string; bytes: Uint8Array }[]): Promise<Reply> {
     const call = request(this.url).post(`/api/manuals/${manualId}/sources`).set('Cookie', this.cookie);
     for (const { name, bytes } of files) call.attach('files', Buffer.from(bytes), name);
-    return (await call) as unknown as Reply;
+    return await call;
   }
 
   async newManual(title = 'HB-12 Harbour Receiver'): Promise<string> {

@@ -99,7 +99,14 @@ const pictureOperators = new Set<number>([
 ]);
 
 /** Operators that set the scene and draw nothing: what is left of a page whose only picture was too large to decode. */
-const bareOperators = new Set<number>([OPS.save, OPS.restore, OPS.transform, OPS.dependency, OPS.beginGroup, OPS.endGroup]);
+const bareOperators = new Set<number>([
+  OPS.save,
+  OPS.restore,
+  OPS.transform,
+  OPS.dependency,
+  OPS.beginGroup,
+  OPS.endGroup,
+]);
 
 /** Whether a page that came out blank should not have: it paints a picture, or sets out to and then does not. */
 async function holdsPictures(page: PDFPageProxy): Promise<boolean> {

@@ -42,6 +42,10 @@ export const changePage = (db: Connection, id: string, change: Partial<PageRow>)
   db.update(pages).set(change).where(eq(pages.id, id)).run();
 };
 
+/** The last part of the picture's key, which no other picture of the page has. */
+const imageVersion = ({ imageKey, drawnKey }: PageRow): string | null =>
+  (imageKey ?? drawnKey)?.split('/').pop()?.replace('.jpg', '') ?? null;
+
 export const pageSummary = (row: PageRow): PageSummary => ({
   id: row.id,
   position: row.position,
@@ -51,7 +55,7 @@ export const pageSummary = (row: PageRow): PageSummary => ({
   doubtCount: row.doubtCount,
   revision: row.revision,
   problem: row.problem,
-  hasImage: (row.imageKey ?? row.drawnKey) !== null,
+  imageVersion: imageVersion(row),
 });
 
 export const newestReading = (db: Connection, row: PageRow) =>

@@ -7,7 +7,6 @@ import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
 import { ScanViewer } from '#src/scan/scan-viewer.tsx';
 import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
-import { useScanVersion } from '#src/scan/use-scan-version.ts';
 import { EditedPage } from './edited-page.tsx';
 import './editor.css';
 
@@ -22,13 +21,15 @@ type Props = {
 /** The page workspace: the scan on one leaf, the page being corrected on the other. */
 export function Workspace({ page, settingBar, links, addressOf }: Props) {
   useAttention(page);
-  const version = useScanVersion(page);
+  const version = page.imageVersion ?? '';
   const [context] = useState(() => ({ imageOf: (zone: Zone) => imageOf(page.id, { zone, v: version }) }));
   const link = usePageLink();
   const size = useMemo(
     () =>
-      page.hasImage && page.width !== null && page.height !== null ? { width: page.width, height: page.height } : null,
-    [page.hasImage, page.width, page.height],
+      page.imageVersion !== null && page.width !== null && page.height !== null
+        ? { width: page.width, height: page.height }
+        : null,
+    [page.imageVersion, page.width, page.height],
   );
   const scan = { pageId: page.id, version, size, label: `Scan of page ${page.label}` };
   if (page.document !== null) {

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { PageSummary } from '#shared/api/pages.ts';
-import { imageOf, imageVersion, readPageAgain } from '#src/api/pages.ts';
+import { imageOf, readPageAgain } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
 import { counted } from '#src/lib/counted.ts';
 import { saidBy } from '#src/lib/said-by.ts';
@@ -73,15 +73,15 @@ export function PageTile({ manualId, page, isLabelling }: Props) {
 }
 
 function Thumbnail({ page }: { page: PageSummary }) {
-  const { id, hasImage } = page;
-  if (!hasImage) {
+  const { id, imageVersion } = page;
+  if (imageVersion === null) {
     return (
       <span className="flex aspect-[17/22] items-center justify-center text-small text-pencil">not drawn yet</span>
     );
   }
   return (
     <img
-      src={imageOf(id, { width: thumbnailWidth, v: imageVersion(page) })}
+      src={imageOf(id, { width: thumbnailWidth, v: imageVersion })}
       alt=""
       loading="lazy"
       decoding="async"

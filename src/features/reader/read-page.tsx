@@ -10,7 +10,6 @@ import { ScanViewer } from '#src/scan/scan-viewer.tsx';
 import { Spine, ticksOf } from '#src/scan/spine.tsx';
 import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
-import { useScanVersion } from '#src/scan/use-scan-version.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 
 type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: readonly Zone[]; query: string };
@@ -18,7 +17,7 @@ type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: 
 /** A page that is read: its text beside its scan, each showing where the other stands. */
 export function ReadPage({ page, hits, query }: Props) {
   useAttention(page);
-  const version = useScanVersion(page);
+  const version = page.imageVersion ?? '';
   const document = page.document as DocNode | null;
   const link = usePageLink(hits[0] ?? null);
   const context = useMemo(
@@ -32,7 +31,9 @@ export function ReadPage({ page, hits, query }: Props) {
   );
   const ticks = useMemo(() => ticksOf(boxes, (key) => wordsAt(document, key)), [boxes, document]);
   const size =
-    page.hasImage && page.width !== null && page.height !== null ? { width: page.width, height: page.height } : null;
+    page.imageVersion !== null && page.width !== null && page.height !== null
+      ? { width: page.width, height: page.height }
+      : null;
   return (
     <TwoLeaves
       scan={
