@@ -26,24 +26,30 @@ function solveAffine({ y, target, start, scale, low, high }: RootTask): number |
   const step = scale / 1024;
   const at = y(start);
   const slope = (y(start + step) - at) / step;
-  const probes = [-3, 2, 512].map((times) => (y(start + times * step) - at) / (times * step));
+  const noise = noiseOf(at, target);
   const isStraight =
     Number.isFinite(slope) &&
     slope !== 0 &&
-    probes.every((each) => Math.abs(each - slope) <= straightWithin * Math.abs(slope));
+    [-3, 2, 512].every((times) => {
+      const off = y(start + times * step) - at - slope * times * step;
+      return Math.abs(off) <= straightWithin * Math.abs(slope * times * step) + noise * Math.abs(times);
+    });
   if (!isStraight) return undefined;
   let x = start + (target - at) / slope;
   // The slope carries a double's last digits; two corrections take them out of the answer.
   for (let turn = 0; turn < 2; turn += 1) x += (target - y(x)) / slope;
-  return isWithin(x, low, high) && hits(y(x), target, Math.abs(slope) * scale) ? x : undefined;
+  return isWithin(x, low, high) && hits(y(x), target, Math.max(noise, Math.abs(slope) * scale * 1e-13)) ? x : undefined;
 }
 
 const isWithin = (x: number, low: number, high: number): boolean =>
   (x >= low || isAbout(x, low)) && (x <= high || isAbout(x, high));
 
-/** Near enough to be the same printed value whatever the digits: a hundredth of a ppm of a ppm of the greater of both. */
-const hits = (value: number, target: number, size: number): boolean =>
-  Math.abs(value - target) <= 1e-10 * Math.max(Math.abs(target), size * 1e-3);
+/** What a double may be off by after a few operations among numbers of this size: some eight of its last digits. */
+const noiseOf = (...sizes: number[]): number => 2 ** -50 * Math.max(...sizes.map(Math.abs));
+
+/** Near enough to be the same printed value whatever the digits, or as near as doubles come. */
+const hits = (value: number, target: number, noise: number): boolean =>
+  Math.abs(value - target) <= Math.max(1e-10 * Math.abs(target), noise);
 
 function solveBracketed(task: RootTask): number | undefined {
   const { y, target, start } = task;
@@ -62,7 +68,7 @@ function solveBracketed(task: RootTask): number | undefined {
   for (const [from, to] of crossings) {
     const x = halve(task, from, to);
     // A sign change may be a jump or a pole; only a hit counts.
-    if (hits(y(x), target, 0)) return x;
+    if (hits(y(x), target, noiseOf(y(start), target))) return x;
   }
   return undefined;
 }

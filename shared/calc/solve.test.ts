@@ -102,6 +102,12 @@ describe('holding a derived quantity', () => {
     expect(evaluate(over('x1'), {}, { pin }).problems).toMatchObject([{ code }]);
   });
 
+  it('is not put off by a large offset that takes the last digits of a small slope', () => {
+    const { pinned } = solveFor('x1 * (-37) + (-999993)', 1);
+    expect(pinned?.method).toBe('affine');
+    expect(pinned?.achieved).toBeCloseTo(1, 8);
+  });
+
   it('meets what it was asked for, whatever the straight line', () => {
     const nonZero = fc.integer({ min: -1000, max: 1000 }).filter((each) => each !== 0);
     fc.assert(
