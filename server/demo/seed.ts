@@ -51,10 +51,13 @@ async function addPeople(auth: Auth): Promise<void> {
 async function bringInManuals(url: string, isNew: boolean): Promise<void> {
   const archivist = await DemoCaller.signIn(url, addressOf('archivist'), password);
   const editor = await DemoCaller.signIn(url, addressOf('editor'), password);
-  for (const manual of demoManuals) {
+  const begun: Work[] = [];
+  // The library shows the newest first, and the first of the demo is to stand on top.
+  for (const manual of demoManuals.toReversed()) {
     const id = isNew ? await upload(archivist, manual) : await findAgain(archivist, manual);
-    if (id !== null) await work(editor, { manual, id });
+    if (id !== null) begun.unshift({ manual, id });
   }
+  for (const each of begun) await work(editor, each);
 }
 
 async function findAgain(caller: DemoCaller, { documentNumber, title }: DemoManual): Promise<string | null> {
