@@ -63,7 +63,7 @@ export function DoubtStrip({ editor, walk, onKeys }: Props) {
           </Button>
         </div>
       )}
-      <p className="mt-2 text-small text-pencil">
+      <p className="mt-2 text-small text-pencil max-md:hidden">
         <kbd>Alt N</kbd> next, <kbd>Alt P</kbd> previous, <kbd>Alt Enter</kbd> right as it stands.{' '}
         <button type="button" className="word-link" onClick={onKeys}>
           All keys
