@@ -6,7 +6,8 @@ import { defineConfig } from 'vitest/config';
 // cores carry no more.
 export default defineConfig({
   plugins: [react(), tailwindcss()],
-  build: { outDir: 'dist/client' },
+  // The editor and the scan viewer are large, and are only fetched with the screens that need them.
+  build: { outDir: 'dist/client', chunkSizeWarningLimit: 900 },
   server: {
     host: '127.0.0.1',
     proxy: { '/api': { target: process.env['API_URL'] ?? 'http://127.0.0.1:3000', changeOrigin: false } },
