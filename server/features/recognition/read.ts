@@ -1,5 +1,6 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
+import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
@@ -17,8 +18,10 @@ export async function readPage({ drawn, dpi, target, wish }: ReadInput): Promise
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, scale, transform } = prepared;
   const read = await recognise(prepared.picture, { segmentation, dpi: Math.round(shown.dpi * scale) });
-  const words = repairWords(
-    read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) })),
+  const words = mendTables(
+    repairWords(
+      read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) })),
+    ),
   );
   return {
     recipe: {
