@@ -37,12 +37,15 @@ const wellFormed = /^([A-Z]{1,2})([1-9]\d{0,3})([A-Z]?)$/;
 
 export const isDesignator = (text: string): boolean => designatorLetters.has(wellFormed.exec(text)?.[1] ?? '');
 
-/** In running text only what leaves no choice is mended: the case of letters before three or four figures. */
+/** In running text only what leaves no choice is mended: small letters before three or four figures, a letter read twice. */
 export function mendDesignator(text: string): Mended | null {
-  const [, open = '', letters = '', figures = '', close = ''] =
-    /^([("']*)([a-z€¢$]{1,2})([1-9]\d{2,3})([).,;:]*)$/.exec(text) ?? [];
+  const [, open = '', name = '', close = ''] = /^([("']*)([A-Za-z€¢$]{1,2}[1-9]\d{1,3})([).,;:]*)$/.exec(text) ?? [];
+  const [, large, small, doubled] = /^([A-Z])([a-z])(\d+)$/.exec(name) ?? [];
+  if (large !== undefined && large === small?.toUpperCase())
+    return { text: `${open}${large}${doubled}${close}`, sure: false };
+  const [, letters = '', figures = ''] = /^([a-z€¢$]{1,2})(\d{3,4})$/.exec(name) ?? [];
   const upper = upperLetters(letters);
-  return figures !== '' && designatorLetters.has(upper) ? { text: open + upper + figures + close, sure: false } : null;
+  return designatorLetters.has(upper) ? { text: open + upper + figures + close, sure: false } : null;
 }
 
 const upperLetters = (letters: string): string =>

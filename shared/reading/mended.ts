@@ -4,7 +4,13 @@ import type { ReadingWord } from './reading.ts';
 export type Mended = { text: string; sure: boolean };
 
 /** What the whole page tells about the signs that it prints. */
-export type PageHabit = { printsMicro: boolean; printsTolerances: boolean; printsPeriodUnits: boolean };
+export type PageHabit = {
+  printsMicro: boolean;
+  printsTolerances: boolean;
+  printsPeriodUnits: boolean;
+  /** A space stands between figures and units. */
+  partsUnits: boolean;
+};
 
 /** The words on either side; the one before is mended already. */
 export type Near = { before: ReadingWord | undefined; next: ReadingWord | undefined };

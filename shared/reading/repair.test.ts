@@ -83,6 +83,11 @@ describe('other slips', () => {
   it.each([
     ['set to 7:5 mc', 'set to 7.5 mc'],
     ['a ratio of 3:1', 'a ratio of 3:1'],
+    ['of ,005 mfd', 'of .005 mfd'],
+    ['SECTION Ill', 'SECTION III'],
+    ['2 v 3 v 4 v 5 v 6 v 8.2K and V1A', '2 v 3 v 4 v 5 v 6 v 8.2 K and V1A'],
+    ['a 5v supply', 'a 5v supply'],
+    ['grid of Vv1141.', 'grid of V1141.'],
     ["'TRANSFORMER, power", 'TRANSFORMER, power'],
     ['set "LOCAL" on', 'set "LOCAL" on'],
   ])('"%s" becomes "%s"', (read, printed) => {

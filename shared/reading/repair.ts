@@ -32,6 +32,7 @@ function habitOf(words: readonly ReadingWord[]): PageHabit {
     printsMicro: units.some(betraysMicro) || (printsPeriodUnits && units.includes('pf')),
     printsTolerances: printsTolerances(words),
     printsPeriodUnits,
+    partsUnits: partsUnitsOn(words),
   };
 }
 
@@ -41,6 +42,9 @@ function mendedWord(word: ReadingWord, near: Near, habit: PageHabit): Mended | n
     mendedUnit(word, near, habit) ??
     mendSign(word.text, near, habit) ??
     mendedColon(word, near) ??
+    mendedPoint(word.text) ??
+    mendedNumeral(word.text, near) ??
+    parted(word.text, habit) ??
     mendDesignator(word.text)
   );
 }
@@ -81,7 +85,7 @@ type Parts = { glued: string; letters: string; close: string };
 function isUnitPlace({ glued, letters, close }: Parts, before: ReadingWord | undefined): boolean {
   // A letter glued to figures is more often part of a name, as in 6AQ5 or 2N404.
   if (/\d/.test(glued)) return letters.length > 1 || letters === 'Q';
-  const isInHead = glued === '(' && /^[km]e$/.test(letters) && close.startsWith(')');
+  const isInHead = glued === '(' && /^[km][e¢]$/.test(letters) && close.startsWith(')');
   return isNumber(before) || isInHead || isDirectCurrent(letters, before);
 }
 
@@ -108,4 +112,34 @@ function mendedColon({ text }: ReadingWord, { next }: Near): Mended | null {
   const unit = next.text.replace(/[).,;:]+$/, '');
   const isUnit = /^[kKMmµpu]?(c|v|a|h|f|w|Ω|Q|meg|volts?)$/.test(unit) || mendUnit(unit) !== null;
   return isUnit ? { text: text.replace(/[:;]/, '.'), sure: false } : null;
+}
+
+/** `,005`: nothing but a point stands in front of a fraction. */
+const mendedPoint = (text: string): Mended | null =>
+  /^[("']?,\d{2,}[).,;]*$/.test(text) ? { text: text.replace(',', '.'), sure: true } : null;
+
+/** "SECTION Ill": capitals behind such a word are a Roman numeral; and "IST" is the first of something. */
+function mendedNumeral(text: string, { before }: Near): Mended | null {
+  if (text === 'IST') return { text: '1ST', sure: false };
+  if (before === undefined || !/^(section|chapter|part|appendix)$/i.test(before.text)) return null;
+  return /^[Il1|]{2,3}$/.test(text) ? { text: 'I'.repeat(text.length), sure: true } : null;
+}
+
+/** Units that no name of a part or a section ends in, so that figures glued to them are figures. */
+const partedUnits =
+  /^([(±+-]?(?:\d[\d.,]*|\.\d+))(v|K|w|meg|mfd|mmf|ma|mc|kc|mv|db|ohms|volts|[µ]{1,2}[fhv])([).,;:]*)$/;
+
+/** On a page that sets a space between figure and unit, one that is missing was lost in reading. */
+function parted(text: string, { partsUnits }: PageHabit): Mended | null {
+  const [, figure, unit, close = ''] = (partsUnits && partedUnits.exec(text)) || [];
+  return figure === undefined ? null : { text: `${figure} ${unit}${close}`, sure: true };
+}
+
+const fewestParted = 5;
+const leastPartedShare = 0.75;
+
+function partsUnitsOn(words: readonly ReadingWord[]): boolean {
+  const glued = words.filter(({ text }) => partedUnits.test(text)).length;
+  const apart = words.filter(({ text }, index) => isNumber(words[index - 1]) && partedUnits.test(`1${text}`)).length;
+  return apart >= fewestParted && apart >= (apart + glued) * leastPartedShare;
 }

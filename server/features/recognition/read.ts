@@ -7,6 +7,7 @@ import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
 import { type Prepared, prepare } from './prepare.ts';
+import { rereadCells } from './reread.ts';
 
 export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
 
@@ -17,12 +18,12 @@ const mostWordsInFigure = 0.22;
 export async function readPage({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, scale, transform } = prepared;
-  const read = await recognise(prepared.picture, { segmentation, dpi: Math.round(shown.dpi * scale) });
-  const words = mendTables(
-    repairWords(
-      read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) })),
-    ),
-  );
+  const engineDpi = Math.round(shown.dpi * scale);
+  const read = (await recognise(prepared.picture, { segmentation, dpi: engineDpi }))
+    .filter(({ text }) => text.trim() !== '')
+    .map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
+  const reread = await rereadCells(read, { clean: prepared.clean, scale, dpi: engineDpi });
+  const words = mendTables(repairWords(reread));
   return {
     recipe: {
       engine: engineName,
