@@ -1,6 +1,7 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import { type Line, bottomOf, median, middleOf, rightOf, rowsByHeight, segmentsOf, zoneAround } from './lines.ts';
 import type { ReadingWord } from './reading.ts';
+import { joinWrapped } from './wrapped-rows.ts';
 
 /** A row of a table found on the page: for each column its words, none for an empty cell. */
 export type FoundRow = { cells: ReadingWord[][]; zone: Zone };
@@ -17,6 +18,8 @@ const valleyCoverShare = 0.045;
 const valleyLetters = 0.8;
 const columnSupportShare = 0.12;
 const leastFilledShare = 0.7;
+const raggedBelowShare = 0.5;
+const raggedGoingOn = 0.6;
 
 /** Finds tables by their words alone: runs of lines that fall into three or more parts, with bands of paper between. */
 export function findTables(words: readonly ReadingWord[]): FoundTable[] {
@@ -51,7 +54,8 @@ function regionsOf(rows: readonly Line[], gap: number, letter: number): Line[][]
   let open: Line[] = [];
   let sinceParted = 0;
   const close = (): void => {
-    const kept = open.slice(0, open.length - sinceParted);
+    const end = open.length - sinceParted;
+    const kept = open.slice(0, end + (goesOn(open[end - 1], open[end], { gap, letter }) ? 1 : 0));
     if (kept.filter((row) => segmentsOf(row, gap).length >= leastSegments).length >= leastRows) regions.push(kept);
     [open, sinceParted] = [[], 0];
   };
@@ -68,14 +72,26 @@ function regionsOf(rows: readonly Line[], gap: number, letter: number): Line[][]
   return regions;
 }
 
+/** Whether the row behind the last one with cells is the end of its wrapped description: close, and not at the margin. */
+function goesOn(
+  last: Line | undefined,
+  next: Line | undefined,
+  { gap, letter }: { gap: number; letter: number },
+): boolean {
+  if (last === undefined || next === undefined) return false;
+  const second = segmentsOf(last, gap)[1]?.[0];
+  const isClose = middleOf(next.zone) - bottomOf(last.zone) < letter * 1.6;
+  return second !== undefined && isClose && next.zone[0] >= second.box[0] - letter;
+}
+
 function tableFrom(region: Line[], gap: number, letter: number): FoundTable | undefined {
   const zone = zoneAround(region.map((row) => row.zone));
   const parted = region.filter((row) => segmentsOf(row, gap).length >= leastSegments);
   const valleys = valleysOf(parted, zone, letter);
-  const columns = mergeWeak(columnsBetween(valleys, zone), parted);
+  const columns = mergeRagged(mergeWeak(columnsBetween(valleys, zone), parted), parted, gap);
   if (columns.length < 2) return undefined;
   const rows = region.map((row) => ({ cells: cellsOf(row, columns), zone: row.zone }));
-  return { zone, columns, rows: joinWrapped(rows, letter) };
+  return { zone, columns, rows: joinWrapped(rows, columns, letter) };
 }
 
 /** Bands of paper that run down through (nearly) all rows. */
@@ -119,6 +135,27 @@ function mergeWeak(columns: FoundTable['columns'], rows: readonly Line[]): Found
   }, []);
 }
 
+/** Most rows that use a column merely go on into it from the one before: a ragged end, such as "v dcw", and no column. */
+function mergeRagged(columns: FoundTable['columns'], rows: readonly Line[], gap: number): FoundTable['columns'] {
+  return columns.reduce<FoundTable['columns']>((kept, column) => {
+    const before = kept.at(-1);
+    if (before === undefined) return [column];
+    const steps = rows.flatMap(({ words }) => {
+      const at = words.findIndex(({ box }) => isWithin(box, column));
+      const [last, first] = [words[at - 1], words[at]];
+      if (first === undefined) return [];
+      return [last === undefined || last.box[0] < before.left ? Infinity : first.box[0] - rightOf(last.box)];
+    });
+    const goingOn = steps.filter((step) => step <= gap).length;
+    if (steps.length < rows.length * raggedBelowShare && goingOn >= steps.length * raggedGoingOn)
+      return [...kept.slice(0, -1), { left: before.left, right: column.right }];
+    return [...kept, column];
+  }, []);
+}
+
+const isWithin = ([x, , w]: Zone, { left, right }: { left: number; right: number }): boolean =>
+  x + w / 2 >= left && x + w / 2 < right;
+
 const cellsOf = ({ words }: Line, columns: FoundTable['columns']): ReadingWord[][] =>
   columns.map(({ left, right }, index) =>
     words.filter(({ box }) => {
@@ -126,19 +163,6 @@ const cellsOf = ({ words }: Line, columns: FoundTable['columns']): ReadingWord[]
       return (middle >= left || index === 0) && (middle < right || index === columns.length - 1);
     }),
   );
-
-/** A row with an empty first cell whose text is close below belongs to the row above: a wrapped description. */
-function joinWrapped(rows: FoundRow[], letter: number): FoundRow[] {
-  return rows.reduce<FoundRow[]>((joined, row) => {
-    const above = joined.at(-1);
-    const filled = row.cells.filter((cell) => cell.length > 0).length;
-    const isClose = above !== undefined && middleOf(row.zone) - bottomOf(above.zone) < letter * 1.6;
-    if (above === undefined || !isClose || row.cells[0]?.length !== 0 || filled !== 1 || joined.length === 1)
-      return [...joined, row];
-    const cells = above.cells.map((cell, index) => [...cell, ...(row.cells[index] ?? [])]);
-    return [...joined.slice(0, -1), { cells, zone: zoneAround([above.zone, row.zone]) }];
-  }, []);
-}
 
 /** Labels of a drawing can line up like a table, but leave many of its cells empty; a printed table seldom does. */
 export function isWellFilled({ rows }: FoundTable): boolean {

@@ -14,7 +14,7 @@ const markOf = (word: ReadingWord): Mark[] => {
 };
 
 function doubtReason(word: ReadingWord): DoubtMark['reason'] | null {
-  if (word.raw !== word.text) return 'sign-guessed';
+  if (word.raw !== word.text && word.sure !== true) return 'sign-guessed';
   if (word.confidence < doubtBelow) return 'low-confidence';
   return /\d[:;]\d|\d[.,]{2}\d|\d,\d{1,2}$|\d,\d{4,}/.test(word.text) ? 'odd-number' : null;
 }

@@ -9,6 +9,8 @@ export const readingWord = z.object({
   box: zone,
   line: z.number().int(),
   block: z.number().int(),
+  /** The text differs from `raw` and the grammar leaves no other reading: not a doubt. */
+  sure: z.boolean().optional(),
 });
 export type ReadingWord = z.infer<typeof readingWord>;
 

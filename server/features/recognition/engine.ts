@@ -23,15 +23,14 @@ async function startedWorker(): Promise<Worker> {
 }
 
 export type Segmentation = 'one-column' | 'columns';
+const modes = { 'one-column': PSM.SINGLE_BLOCK, columns: PSM.AUTO, line: PSM.SINGLE_LINE } as const;
+type How = { segmentation: keyof typeof modes; dpi: number };
 
 /** Recognises the words of an encoded picture whose resolution is known. Boxes are in its pixels. */
-export async function recognise(
-  picture: Buffer,
-  { segmentation, dpi }: { segmentation: Segmentation; dpi: number },
-): Promise<ReadingWord[]> {
+export async function recognise(picture: Buffer, { segmentation, dpi }: How): Promise<ReadingWord[]> {
   const engine = await startedWorker();
   await engine.setParameters({
-    tessedit_pageseg_mode: segmentation === 'columns' ? PSM.AUTO : PSM.SINGLE_BLOCK,
+    tessedit_pageseg_mode: modes[segmentation],
     // Left to guess, the engine takes a wrong resolution and its line finding goes astray.
     user_defined_dpi: String(dpi),
     tessedit_do_invert: '0',

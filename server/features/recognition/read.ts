@@ -1,11 +1,13 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
+import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
 import { type Prepared, prepare } from './prepare.ts';
+import { rereadCells } from './reread.ts';
 
 export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
 
@@ -16,10 +18,12 @@ const mostWordsInFigure = 0.22;
 export async function readPage({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, scale, transform } = prepared;
-  const read = await recognise(prepared.picture, { segmentation, dpi: Math.round(shown.dpi * scale) });
-  const words = repairWords(
-    read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) })),
-  );
+  const engineDpi = Math.round(shown.dpi * scale);
+  const read = (await recognise(prepared.picture, { segmentation, dpi: engineDpi }))
+    .filter(({ text }) => text.trim() !== '')
+    .map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
+  const reread = await rereadCells(read, { clean: prepared.clean, scale, dpi: engineDpi });
+  const words = mendTables(repairWords(reread));
   return {
     recipe: {
       engine: engineName,

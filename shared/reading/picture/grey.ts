@@ -45,5 +45,9 @@ export function inkThreshold({ data }: GreyPicture): number {
 
 /** 1 where there is ink, 0 where there is paper. */
 export function inkOf(picture: GreyPicture, threshold = inkThreshold(picture)): Uint8Array {
-  return Uint8Array.from(picture.data, (level) => (level <= threshold ? 1 : 0));
+  const { data } = picture;
+  const ink = new Uint8Array(data.length);
+  // A plain loop: a mapping function over eight million pixels takes ten times as long.
+  for (let at = 0; at < data.length; at += 1) if ((data[at] ?? 255) <= threshold) ink[at] = 1;
+  return ink;
 }

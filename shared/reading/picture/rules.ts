@@ -5,38 +5,56 @@ export type Rule = { direction: 'across' | 'down'; x: number; y: number; length:
 
 const shortestAcrossInches = 0.33;
 const shortestDownInches = 0.22;
-/** Ink may be missing for this long within a rule: paper grain, a faded stroke. */
-const gapInches = 1 / 90;
 const thickestInches = 0.03;
+/**
+ * The second pass is for rules that are faded or worn: it takes lighter ink and longer gaps, but only where there is
+ * paper on both sides nearly all along. A run of letters' crossbars looks like a short rule, so those must be as clear.
+ */
+const passes = [
+  { lighter: 25, gapInches: 1 / 90, thinShare: 0.6 },
+  { lighter: 45, gapInches: 1 / 45, thinShare: 0.9 },
+];
+const shortBelowInches = 1;
+const shortThinShare = 0.9;
 
 /**
  * Finds ruling lines and paints them out, for reading only: with its rules in place a table is lost to the engine.
  * `threshold` parts ink from paper. Lengths come from trials on generated scans of ruled parts lists.
  */
 export function removeRules(picture: GreyPicture, dpi: number): { picture: GreyPicture; rules: Rule[] } {
-  const threshold = Math.min(220, inkThreshold(picture) + 25);
+  const inkBelow = inkThreshold(picture);
   const cleaned = Uint8Array.from(picture.data);
   const rules: Rule[] = [];
-  const scan = (direction: Rule['direction']): void => {
-    const isAcross = direction === 'across';
-    const lanes = isAcross ? picture.height : picture.width;
-    const shortest = Math.round((isAcross ? shortestAcrossInches : shortestDownInches) * dpi);
-    for (let lane = 0; lane < lanes; lane += 1) {
-      for (const run of longRuns(picture, { isAcross, lane, shortest, threshold, gap: Math.round(gapInches * dpi) })) {
-        if (!isThin(picture, { isAcross, lane, threshold, thickest: Math.round(thickestInches * dpi), ...run }))
-          continue;
-        paint(cleaned, picture, { isAcross, lane, ...run });
-        rules.push(
-          isAcross
-            ? { direction, x: run.start, y: lane, length: run.length }
-            : { direction, x: lane, y: run.start, length: run.length },
-        );
-      }
-    }
-  };
-  scan('across');
-  scan('down');
+  for (const { lighter, gapInches, thinShare } of passes) {
+    const threshold = Math.min(225, inkBelow + lighter);
+    const scan = { threshold, gap: Math.round(gapInches * dpi), thinShare, dpi };
+    for (const isAcross of [true, false]) rules.push(...removedAlong(picture, cleaned, { ...scan, isAcross }));
+  }
   return { picture: { ...picture, data: cleaned }, rules };
+}
+
+type Scan = { isAcross: boolean; threshold: number; gap: number; thinShare: number; dpi: number };
+
+function removedAlong(picture: GreyPicture, cleaned: Uint8Array, scan: Scan): Rule[] {
+  const { isAcross, threshold, gap, thinShare, dpi } = scan;
+  const rules: Rule[] = [];
+  const lanes = isAcross ? picture.height : picture.width;
+  const shortest = Math.round((isAcross ? shortestAcrossInches : shortestDownInches) * dpi);
+  const thickest = Math.round(thickestInches * dpi);
+  for (let lane = 0; lane < lanes; lane += 1) {
+    for (const run of longRuns(picture, { isAcross, lane, shortest, threshold, gap })) {
+      const least = run.length < shortBelowInches * dpi ? Math.max(thinShare, shortThinShare) : thinShare;
+      if (thinnessOf(picture, { isAcross, lane, threshold, thickest, ...run }) < least) continue;
+      paint(cleaned, picture, { isAcross, lane, ...run });
+      const { start, length } = run;
+      rules.push(
+        isAcross
+          ? { direction: 'across', x: start, y: lane, length }
+          : { direction: 'down', x: lane, y: start, length },
+      );
+    }
+  }
+  return rules;
 }
 
 type Run = { start: number; length: number };
@@ -63,8 +81,8 @@ function longRuns({ width, height, data }: GreyPicture, lane: Lane & { shortest:
   return runs;
 }
 
-/** A rule has paper on both sides along most of its length; a dark patch or a drawing's shading has not. */
-function isThin({ width, height, data }: GreyPicture, run: Lane & Run & { thickest: number }): boolean {
+/** The share of a run with paper on both sides: most of a rule, little of a dark patch or a drawing's shading. */
+function thinnessOf({ width, height, data }: GreyPicture, run: Lane & Run & { thickest: number }): number {
   const { isAcross, lane, start, length, threshold, thickest } = run;
   const limit = isAcross ? height : width;
   const samples = 24;
@@ -81,7 +99,7 @@ function isThin({ width, height, data }: GreyPicture, run: Lane & Run & { thicke
     for (let side = lane + 1; inkAt(side) && thickness <= thickest; side += 1) thickness += 1;
     if (thickness <= thickest) thin += 1;
   }
-  return thin >= samples * 0.6;
+  return thin / samples;
 }
 
 /** Paints a run white, one pixel to either side included: the soft edge of the stroke would be read as specks. */
