@@ -20,7 +20,7 @@ export default defineConfig({
           include: [
             'shared/**/*.test.ts',
             'server/**/*.test.ts',
-            'tests/{architecture,document,migrations}/**/*.test.ts',
+            'tests/{architecture,migrations}/**/*.test.ts',
           ],
         },
       },
