@@ -1,3 +1,4 @@
+import sharp from 'sharp';
 import { type InspectInput, inspect } from '#server/features/pages/inspect.ts';
 import { type DrawInput, drawPage } from '#server/features/pages/draw.ts';
 import type { WorkerReply, WorkerRequest } from '#server/jobs/worker-pool.ts';
@@ -25,8 +26,15 @@ async function answer({ id, task, input }: WorkerRequest): Promise<WorkerReply> 
   }
 }
 
+// Each page is another picture: nothing that the library keeps would be asked for again.
+sharp.cache(false);
+
 process.on('message', (request: WorkerRequest) => {
-  void answer(request).then((reply) => process.send?.(reply));
+  void answer(request).then((reply) => {
+    process.send?.(reply);
+    // Pictures lie outside the script's own heap, so their garbage presses too little to be collected by itself.
+    globalThis.gc?.();
+  });
 });
 process.on('disconnect', () => process.exit(0));
 // Libraries throw inside callbacks on bad files; the job is then failed by its time limit or by this exit.

@@ -19,7 +19,7 @@ const environment = z.object({
   MAX_UPLOAD_MB: count.default(1024),
   MAX_PAGES: count.default(2000),
   MAX_PICTURE_MEGAPIXELS: count.default(120),
-  WORKER_MEMORY_MB: count.default(1000),
+  WORKER_MEMORY_MB: count.default(900),
   PAGE_TIMEOUT_SECONDS: count.default(180),
   SMTP_URL: z.string().optional(),
   MAIL_FROM: z.string().default('Benchleaf <no-reply@benchleaf.example>'),
