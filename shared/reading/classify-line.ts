@@ -12,7 +12,7 @@ const spaced = (word: string): string => [...word].join('\\s*');
 const admonition = new RegExp(`^\\W*(${['WARNING', 'CAUTION', 'NOTE'].map(spaced).join('|')})\\W*$`, 'i');
 const captionStart = /^(fig(?:ure|\.)?|table)\s*[0-9]+[-–.0-9A-Z]*[.:)]?\b/i;
 const chapter = /^(section|chapter|part|appendix)\s+([IVXLC]+|\d+|[A-Z])\b/i;
-const numbered = /^(\d+(?:[-–.]\d+)+)\.?$/;
+const numbered = /^(\d+(?:[-–.]\d+)+)[.,]?$/;
 /** "a." "(3)" "12." "b)" - one or two letters or digits with a closing sign, as steps are marked. */
 const marker = /^\(?([a-z]{1,2}|[A-Z]|\d{1,2})[.)]$/;
 /** How recognition bends a lone small letter with its stop: "Cc." for "c.", "c," or "¢." for "c.". */

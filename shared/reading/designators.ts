@@ -37,15 +37,25 @@ const wellFormed = /^([A-Z]{1,2})([1-9]\d{0,3})([A-Z]?)$/;
 
 export const isDesignator = (text: string): boolean => designatorLetters.has(wellFormed.exec(text)?.[1] ?? '');
 
+const inText = /^([("']*)([A-Za-z€¢$]{1,2}[1-9]\d{1,3})([).,;:]*)$/;
+
 /** In running text only what leaves no choice is mended: small letters before three or four figures, a letter read twice. */
 export function mendDesignator(text: string): Mended | null {
-  const [, open = '', name = '', close = ''] = /^([("']*)([A-Za-z€¢$]{1,2}[1-9]\d{1,3})([).,;:]*)$/.exec(text) ?? [];
-  const [, large, small, doubled] = /^([A-Z])([a-z])(\d+)$/.exec(name) ?? [];
-  if (large !== undefined && large === small?.toUpperCase())
-    return { text: `${open}${large}${doubled}${close}`, sure: false };
+  const [, open = '', name = '', close = ''] = inText.exec(text) ?? [];
+  const mended = withoutDouble(name) ?? inCapitals(name);
+  return mended === null ? null : { text: open + mended + close, sure: false };
+}
+
+/** "Vv1141": the letter was read large and small. */
+function withoutDouble(name: string): string | null {
+  const [, large, small, figures] = /^([A-Z])([a-z])(\d+)$/.exec(name) ?? [];
+  return large !== undefined && figures !== undefined && large === small?.toUpperCase() ? large + figures : null;
+}
+
+function inCapitals(name: string): string | null {
   const [, letters = '', figures = ''] = /^([a-z€¢$]{1,2})(\d{3,4})$/.exec(name) ?? [];
   const upper = upperLetters(letters);
-  return designatorLetters.has(upper) ? { text: open + upper + figures + close, sure: false } : null;
+  return designatorLetters.has(upper) ? upper + figures : null;
 }
 
 const upperLetters = (letters: string): string =>

@@ -30,12 +30,14 @@ export const recipe = z.object({
   skewDegrees: z.number(),
   rulesRemoved: z.boolean(),
   flattened: z.boolean(),
+  /** How far the page was turned clockwise to stand upright; readings made before this was done have none. */
+  turnDegrees: z.literal([0, 90, 180, 270]).optional(),
 });
 export type Recipe = z.infer<typeof recipe>;
 
 /** The parts of a recipe that an archivist may set by hand; what is left out is decided from the picture. */
 export const recipeWish = recipe
-  .pick({ segmentation: true, skewDegrees: true, rulesRemoved: true, flattened: true })
+  .pick({ segmentation: true, skewDegrees: true, rulesRemoved: true, flattened: true, turnDegrees: true })
   .partial()
   .extend({ skewDegrees: z.number().min(-45).max(45).optional() });
 export type RecipeWish = z.infer<typeof recipeWish>;

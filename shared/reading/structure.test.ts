@@ -101,6 +101,24 @@ describe('the structure of a page', () => {
     ).toEqual(['paragraph', 'paragraph']);
   });
 
+  it('starts a new paragraph behind a step, where a line begins further out than the text of the step', () => {
+    const document = documentOfLines(
+      ...page(
+        '   1. Connect the meter and',
+        '      read it.',
+        '  The heater is rated',
+        '6.3 volts.',
+        '   2. Turn it off.',
+      ),
+    );
+    expect(kindsOf(document)).toEqual(['step', 'paragraph', 'step']);
+  });
+
+  it('ends a caption in capitals where small letters begin', () => {
+    const document = documentOfLines(...page('TABLE 4-7. CHANNEL FREQUENCIES', 'The crystal is found by subtracting.'));
+    expect(kindsOf(document)).toEqual(['caption', 'paragraph']);
+  });
+
   it('puts a figure where it stands, keeps its lettering with it, and its caption below', () => {
     const words = wordsOf([
       [300, 400, 'Before the figure.'],

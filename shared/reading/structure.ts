@@ -1,10 +1,11 @@
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import type { PageDocument } from '#shared/document/page-document.ts';
 import { currentVersion } from '#shared/document/upgrades.ts';
-import { type LineKind, classifyLine } from './classify-line.ts';
+import type { LineKind } from './classify-line.ts';
 import { findTables } from './find-tables.ts';
+import { gatherLines } from './gather-lines.ts';
 import { inlineOf } from './inline.ts';
-import { type Line, bottomOf, linesOf, lineText, median, middleOf, rightOf, zoneAround } from './lines.ts';
+import { type Line, bottomOf, linesOf, median, middleOf, zoneAround } from './lines.ts';
 import { overlap } from './picture/figures.ts';
 import type { Reading } from './reading.ts';
 import { withoutSpecks } from './specks.ts';
@@ -36,7 +37,7 @@ export function documentOf(reading: Reading): PageDocument {
   const pieces: Piece[] = [
     ...running.filter(({ node }) => node.attrs?.['place'] === 'head'),
     ...inOrder([
-      ...textPieces(body),
+      ...joinAdmonitions(gatherLines(body).map(({ kind, lines: own }) => pieceOf(kind, own))),
       ...tables.map((table) => ({ node: tableBlock(table, ''), zone: table.zone })),
       ...figures.map((zone) => ({ node: { type: 'figure', attrs: { zone, description: labels(zone) } }, zone })),
     ]),
@@ -94,50 +95,6 @@ function partRunning(lines: Line[], { width, height }: Reading): { body: Line[];
 }
 
 const sameRow = (a: Line, b: Line): boolean => Math.abs(middleOf(a.zone) - middleOf(b.zone)) < a.zone[3] * 0.5;
-
-/** Lines gathered into blocks; what a line is and how far it stands from the one before decide where one begins. */
-function textPieces(lines: Line[]): Piece[] {
-  const groups: { kind: LineKind; lines: Line[] }[] = [];
-  const letter = median(lines.map(({ zone }) => zone[3]));
-  const pitch = linePitch(lines);
-  for (const [index, line] of lines.entries()) {
-    const kind = classifyLine(line);
-    const group = groups.at(-1);
-    if (group === undefined || startsNew({ line, kind, group, before: lines[index - 1] }, { letter, pitch }))
-      groups.push({ kind, lines: [line] });
-    else group.lines.push(line);
-  }
-  return joinAdmonitions(groups.map(({ kind, lines: own }) => pieceOf(kind, own)));
-}
-
-function linePitch(lines: Line[]): number {
-  const steps = lines.slice(1).map((line, index) => middleOf(line.zone) - middleOf(lines[index]?.zone ?? line.zone));
-  return median(steps.filter((step) => step > 0));
-}
-
-type Meeting = { line: Line; kind: LineKind; group: { kind: LineKind; lines: Line[] }; before: Line | undefined };
-
-function startsNew(meeting: Meeting, { letter, pitch }: { letter: number; pitch: number }): boolean {
-  const { line, kind, group, before } = meeting;
-  const step = before === undefined ? 0 : middleOf(line.zone) - middleOf(before.zone);
-  const isNear = step > 0 && step < pitch * 1.35;
-  if (group.kind.kind === 'heading' && kind.kind === 'heading') return !isNear || group.kind.level !== kind.level;
-  if (before === undefined || kind.kind !== 'text' || standsAlone.has(group.kind.kind)) return true;
-  const isSentenceOver = /[.:]$/.test(lineText(before));
-  // A step back up the page is the next column: the paragraph goes on there unless its sentence is over.
-  if (!isNear) return step >= 0 || isSentenceOver;
-  return isSentenceOver && isIndentedAfterShort(meeting, before, letter);
-}
-
-/** What never goes on in the next line, however close that is. */
-const standsAlone = new Set<LineKind['kind']>(['admonition-word', 'heading']);
-
-/** A paragraph set off by its first line alone: indented, behind a line that ends well short of the margin. */
-function isIndentedAfterShort({ line, group }: Meeting, before: Line, letter: number): boolean {
-  const left = Math.min(...group.lines.map(({ zone }) => zone[0]));
-  const right = Math.max(...group.lines.map(({ zone }) => rightOf(zone)));
-  return group.kind.kind === 'text' && line.zone[0] - left > letter * 2 && rightOf(before.zone) < right - letter * 8;
-}
 
 function pieceOf(kind: LineKind, lines: Line[]): Piece {
   const zone = zoneAround(lines.map((line) => line.zone));

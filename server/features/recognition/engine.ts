@@ -23,7 +23,12 @@ async function startedWorker(): Promise<Worker> {
 }
 
 export type Segmentation = 'one-column' | 'columns';
-const modes = { 'one-column': PSM.SINGLE_BLOCK, columns: PSM.AUTO, line: PSM.SINGLE_LINE } as const;
+const modes = {
+  'one-column': PSM.SINGLE_BLOCK,
+  columns: PSM.AUTO,
+  line: PSM.SINGLE_LINE,
+  labels: PSM.SPARSE_TEXT,
+} as const;
 type How = { segmentation: keyof typeof modes; dpi: number };
 
 /** Recognises the words of an encoded picture whose resolution is known. Boxes are in its pixels. */

@@ -7,6 +7,7 @@ import { medianFiltered } from '#shared/reading/picture/median.ts';
 import { removePatches } from '#shared/reading/picture/patches.ts';
 import { removeRules } from '#shared/reading/picture/rules.ts';
 import { skewDegrees } from '#shared/reading/picture/skew.ts';
+import { type Turn, backFrom, composed, isQuarter } from '#shared/reading/picture/turn.ts';
 import type { RecipeWish, Transform } from '#shared/reading/reading.ts';
 import type { Segmentation } from './engine.ts';
 
@@ -29,6 +30,8 @@ export type Prepared = {
   picture: Buffer;
   /** The same, not encoded: cells that are read once more are cut from it. */
   clean: GreyPicture;
+  /** The same with its rules and leaders in place: the lines of a drawing hold its lettering apart. */
+  lined: GreyPicture;
   scale: number;
   segmentation: Segmentation;
   rulesRemoved: boolean;
@@ -44,10 +47,12 @@ export async function prepare(
   dpi: number,
   { target, wish }: { target: string; wish: RecipeWish },
 ): Promise<Prepared> {
-  const { width, height } = await sharp(drawn).metadata();
+  const turn = wish.turnDegrees ?? 0;
+  const { width, height } = turnedSize(await sharp(drawn).metadata(), turn);
   const size = dpi > finestDpi ? readingDpi / dpi : 1;
   const shrunk = { width: Math.round(width * size), height: Math.round(height * size) };
   const { data, info } = await sharp(drawn)
+    .rotate(turn)
     .resize(shrunk.width, shrunk.height, { fit: 'fill' })
     .raw()
     .toBuffer({ resolveWithObject: true });
@@ -64,7 +69,9 @@ export async function prepare(
   // Made even before it is turned: the white corners that turning adds would otherwise pull the paper beside them down.
   const straight = lean === 0 ? even : await greyOf(sharpOf(even).rotate(-lean, { background: 'white' }));
   const engine = forEngine(await atReadingSize(straight, shown.dpi), wish);
-  return { shown, skew: lean, transform: backToDrawn(shrunk, shown, { lean, size }), ...engine };
+  const leant = backToDrawn(shrunk, shown, { lean, size });
+  const transform = composed(leant, backFrom(turn, turnedSize({ width, height }, turn)));
+  return { shown, skew: lean, transform, ...engine };
 }
 
 const sharpOf = ({ width, height, data }: GreyPicture): Sharp =>
@@ -105,6 +112,7 @@ function forEngine({ scale, dpi, ...flat }: Sized, wish: RecipeWish): EnginePart
   return {
     picture: encoded(clean),
     clean,
+    lined: flat,
     scale,
     segmentation,
     rulesRemoved,
@@ -113,6 +121,10 @@ function forEngine({ scale, dpi, ...flat }: Sized, wish: RecipeWish): EnginePart
     coarseScale: factor / scale,
   };
 }
+
+/** Turning twice gives the size back, so it serves both ways. */
+const turnedSize = ({ width, height }: Size, turn: Turn): Size =>
+  isQuarter(turn) ? { width: height, height: width } : { width, height };
 
 type Size = { width: number; height: number };
 

@@ -1,5 +1,6 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import { type DoubtfulCell, betterReading, doubtfulCells, withCellsReplaced } from '#shared/reading/doubtful-cells.ts';
+import { mergedLabels } from '#shared/reading/labels.ts';
 import { type GreyPicture, blankPicture } from '#shared/reading/picture/grey.ts';
 import type { ReadingWord } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
@@ -14,7 +15,7 @@ const beyond = 5;
 const fewestInkPixels = 30;
 const darkBelow = 150;
 
-type Picture = { clean: GreyPicture; scale: number; dpi: number };
+type Picture = { picture: GreyPicture; scale: number; dpi: number };
 
 /** Reads doubtful cells of tables once more, each as a single line, and keeps the more confident reading. */
 export async function rereadCells(words: readonly ReadingWord[], picture: Picture): Promise<ReadingWord[]> {
@@ -23,19 +24,34 @@ export async function rereadCells(words: readonly ReadingWord[], picture: Pictur
   const rawOf = new Map(repairWords(words).map((word, index) => [word, words[index]]));
   for (const cell of doubtfulCells([...rawOf.keys()])) {
     const own = cell.words.flatMap((word) => rawOf.get(word) ?? []);
-    const again = await readCell(cell.zone, picture);
+    const again = await readPiece(cell.zone, picture, 'line');
     const better = betterReading(own, again);
     if (better !== own) replaced.push({ cell: { zone: cell.zone, words: own }, by: better });
   }
   return withCellsReplaced(words, replaced);
 }
 
-async function readCell(zone: Zone, { clean, scale, dpi }: Picture): Promise<ReadingWord[]> {
+/** Reads each drawing once more on its own, its lines in place, in no order: for labels that the page's reading lost. */
+export async function rereadFigures(
+  words: readonly ReadingWord[],
+  figures: readonly Zone[],
+  picture: Picture,
+): Promise<ReadingWord[]> {
+  let merged = [...words];
+  for (const zone of figures) merged = mergedLabels(merged, await readPiece(zone, picture, 'labels'), zone);
+  return merged;
+}
+
+async function readPiece(
+  zone: Zone,
+  { picture, scale, dpi }: Picture,
+  segmentation: 'line' | 'labels',
+): Promise<ReadingWord[]> {
   const [x, y, width, height] = zone.map((each) => Math.round(each * scale)) as Zone;
   const area: Zone = [x - beyond, y - beyond, width + 2 * beyond, height + 2 * beyond];
-  const piece = cut(clean, area);
+  const piece = cut(picture, area);
   if (piece === null) return [];
-  const read = await recognise(encoded(piece), { segmentation: 'line', dpi });
+  const read = await recognise(encoded(piece), { segmentation, dpi });
   return read
     .filter(({ text }) => text.trim() !== '')
     .map((word) => {
