@@ -17,11 +17,7 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: [
-            'shared/**/*.test.ts',
-            'server/**/*.test.ts',
-            'tests/{architecture,migrations}/**/*.test.ts',
-          ],
+          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'tests/{architecture,migrations}/**/*.test.ts'],
         },
       },
       { plugins: [react()], test: { name: 'client', environment: 'jsdom', include: ['src/**/*.test.{ts,tsx}'] } },
