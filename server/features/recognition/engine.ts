@@ -34,12 +34,7 @@ type How = { segmentation: keyof typeof modes; dpi: number };
 /** Recognises the words of an encoded picture whose resolution is known. Boxes are in its pixels. */
 export async function recognise(picture: Buffer, { segmentation, dpi }: How): Promise<ReadingWord[]> {
   const engine = await startedWorker();
-  await engine.setParameters({
-    tessedit_pageseg_mode: modes[segmentation],
-    // Left to guess, the engine takes a wrong resolution and its line finding goes astray.
-    user_defined_dpi: String(dpi),
-    tessedit_do_invert: '0',
-  });
+  await setUp(engine, { segmentation, dpi });
   const { data } = await engine.recognize(picture, {}, { text: false, blocks: true });
   return (data.blocks ?? []).flatMap((block, blockIndex) =>
     block.paragraphs
@@ -55,6 +50,21 @@ export async function recognise(picture: Buffer, { segmentation, dpi }: How): Pr
         })),
       ),
   );
+}
+
+let lastSetUp = '';
+
+/** Cells are read by the dozen with the same settings, which need telling only once. */
+async function setUp(engine: Worker, { segmentation, dpi }: How): Promise<void> {
+  const wanted = `${segmentation} ${dpi}`;
+  if (wanted === lastSetUp) return;
+  await engine.setParameters({
+    tessedit_pageseg_mode: modes[segmentation],
+    // Left to guess, the engine takes a wrong resolution and its line finding goes astray.
+    user_defined_dpi: String(dpi),
+    tessedit_do_invert: '0',
+  });
+  lastSetUp = wanted;
 }
 
 /** Lines are numbered through the page by block and place in it; no block of a page has so many. */

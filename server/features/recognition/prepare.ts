@@ -15,7 +15,7 @@ import type { Segmentation } from './engine.ts';
 const readingDpi = 300;
 const finestDpi = 400;
 const coarsestDpi = 250;
-const analysisDpi = 100;
+export const analysisDpi = 100;
 /** A page that leans less than this is left as it is: turning it would only soften it. */
 const leastSkewDegrees = 0.08;
 /** Best codes for each picture would save 3 % of its size for eight times the time. */

@@ -2,13 +2,15 @@ import type { Zone } from '#shared/document/define-block.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
+import { shrink } from '#shared/reading/picture/grey.ts';
+import { unreadMargins } from '#shared/reading/picture/margins.ts';
 import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
-import { type Prepared, prepare } from './prepare.ts';
+import { type Prepared, analysisDpi, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
-import { rereadCells, rereadFigures } from './reread.ts';
+import { readMargins, rereadCells, rereadFigures } from './reread.ts';
 
 export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
 
@@ -32,15 +34,9 @@ export async function readPage(input: ReadInput): Promise<Reading> {
 
 async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
-  const { shown, segmentation, scale, transform } = prepared;
-  const engineDpi = Math.round(shown.dpi * scale);
-  const read = (await recognise(prepared.picture, { segmentation, dpi: engineDpi }))
-    .filter(({ text }) => text.trim() !== '')
-    .map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
-  const reread = await rereadCells(read, { picture: prepared.clean, scale, dpi: engineDpi });
-  const figures = figuresOf(prepared, repairWords(reread));
-  const labelled = await rereadFigures(reread, figures, { picture: prepared.lined, scale, dpi: engineDpi });
-  const words = mendTables(repairWords(labelled));
+  const { shown, segmentation, transform } = prepared;
+  const read = await recognisedWords(prepared);
+  const { words, figures } = await secondLooks(prepared, read);
   return {
     recipe: {
       engine: engineName,
@@ -59,6 +55,35 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
     words,
     figures,
   };
+}
+
+const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dpi * scale);
+
+async function recognisedWords(prepared: Prepared): Promise<ReadingWord[]> {
+  const { segmentation, scale } = prepared;
+  const read = await recognise(prepared.picture, { segmentation, dpi: dpiForEngine(prepared) });
+  return read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
+}
+
+/** Doubtful cells, drawings and passed-over margins are read on their own; then the whole is mended. */
+async function secondLooks(
+  prepared: Prepared,
+  read: readonly ReadingWord[],
+): Promise<{ words: ReadingWord[]; figures: Zone[] }> {
+  const { scale, clean, lined } = prepared;
+  const page = { picture: clean, scale, dpi: dpiForEngine(prepared) };
+  const withMargins = await readMargins(read, unreadIn(prepared, read), page);
+  const withCells = await rereadCells(withMargins, page);
+  const figures = figuresOf(prepared, repairWords(withCells));
+  const labelled = await rereadFigures(withCells, figures, { ...page, picture: lined });
+  return { words: mendTables(repairWords(labelled)), figures };
+}
+
+function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
+  const factor = Math.max(1, Math.round((shown.dpi * scale) / analysisDpi));
+  const toShown = factor / scale;
+  const boxes = words.map(({ box }) => scaled(box, 1 / toShown));
+  return unreadMargins(shrink(clean, factor), shown.dpi / toShown, boxes).map((zone) => scaled(zone, toShown));
 }
 
 const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;

@@ -42,6 +42,25 @@ export async function rereadFigures(
   return merged;
 }
 
+/** A page number must be read as surely as this: what is left of a shadow reads as letters too. */
+const surelyRunning = 60;
+
+/** Reads lines at the head or the foot of the page that the page's reading passed over. */
+export async function readMargins(
+  words: readonly ReadingWord[],
+  zones: readonly Zone[],
+  picture: Picture,
+): Promise<ReadingWord[]> {
+  const added = [...words];
+  for (const zone of zones) {
+    const read = await readPiece(zone, picture, 'line');
+    const line = Math.max(0, ...added.map((word) => word.line)) + 1;
+    const isSure = read.every(({ confidence }) => confidence >= surelyRunning);
+    if (isSure) added.push(...read.map((word) => ({ ...word, line })));
+  }
+  return added;
+}
+
 async function readPiece(
   zone: Zone,
   { picture, scale, dpi }: Picture,

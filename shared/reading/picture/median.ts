@@ -30,8 +30,13 @@ function sortColumns(data: Uint8Array, { width, y }: Row, { low, middle, high }:
   }
 }
 
+const white = 255;
+
+/** `out` begins as a copy, so what is left alone stays. */
 function fillRow(out: Uint8Array, { width, y }: Row, { low, middle, high }: Columns): void {
   for (let x = 1; x < width - 1; x += 1) {
+    // Most of a page is even paper, where there is nothing to sort.
+    if (at(low, x - 1) === white && at(low, x) === white && at(low, x + 1) === white) continue;
     out[y * width + x] = middleOf(
       greatest(at(low, x - 1), at(low, x), at(low, x + 1)),
       middleOf(at(middle, x - 1), at(middle, x), at(middle, x + 1)),
