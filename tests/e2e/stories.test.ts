@@ -191,7 +191,17 @@ describe('the four stories', () => {
 
   it('the reader finds the corrected word, with its box on the scan', async () => {
     const { page, context } = await windowOf('reader');
+    // The key is heard once the bar that it leads to is there.
+    await page.getByLabel('Search all manuals').first().waitFor();
     await page.keyboard.press('/');
+    await expect
+      .poll(() =>
+        page
+          .getByLabel('Search all manuals')
+          .first()
+          .evaluate((field) => field === document.activeElement),
+      )
+      .toBe(true);
     await page.keyboard.type('uttermost');
     await page.keyboard.press('Enter');
     const hit = page.getByRole('link', { name: /uttermost/ }).first();
