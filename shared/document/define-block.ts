@@ -4,6 +4,15 @@ import { z } from 'zod';
 export const zone = z.tuple([z.number(), z.number(), z.number().nonnegative(), z.number().nonnegative()]);
 export type Zone = z.infer<typeof zone>;
 
+/** The smallest rectangle around the given ones. */
+export function zoneAround(zones: readonly Zone[]): Zone {
+  const left = Math.min(...zones.map(([x]) => x));
+  const top = Math.min(...zones.map(([, y]) => y));
+  const right = Math.max(...zones.map(([x, , w]) => x + w));
+  const bottom = Math.max(...zones.map(([, y, , h]) => y + h));
+  return [left, top, right - left, bottom - top];
+}
+
 export type Mark = { type: string; attrs?: Record<string, unknown> };
 /** A node of the page document as ProseMirror writes it to JSON. */
 export type DocNode = {

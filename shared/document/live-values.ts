@@ -1,5 +1,5 @@
 import { type Result, fail, succeed } from '#shared/kit/result.ts';
-import type { DocNode, Zone } from './define-block.ts';
+import { type DocNode, type Zone, zoneAround } from './define-block.ts';
 import { textOf } from './text-of.ts';
 
 /** The printed text to make live, with the words right before it where it stands more than once. */
@@ -63,11 +63,5 @@ const cut = (node: DocNode, from: number, to: number): DocNode => ({
   text: (node.text ?? '').slice(from, to),
 });
 
-/** The smallest rectangle around some zones; null when there are none. */
-export function around(zones: readonly Zone[]): Zone | null {
-  if (zones.length === 0) return null;
-  const [left, top] = [Math.min(...zones.map(([x]) => x)), Math.min(...zones.map(([, y]) => y))];
-  const right = Math.max(...zones.map(([x, , w]) => x + w));
-  const bottom = Math.max(...zones.map(([, y, , h]) => y + h));
-  return [left, top, right - left, bottom - top];
-}
+/** The rectangle around some zones; null when there are none. */
+export const around = (zones: readonly Zone[]): Zone | null => (zones.length === 0 ? null : zoneAround(zones));

@@ -1,6 +1,6 @@
-import type { Zone } from '#shared/document/define-block.ts';
+import { type Zone, zoneAround } from '#shared/document/define-block.ts';
 import { findTables } from './find-tables.ts';
-import { median, rightOf, rowsByHeight, zoneAround } from './lines.ts';
+import { median, rightOf, rowsByHeight } from './lines.ts';
 import type { ReadingWord } from './reading.ts';
 import { withoutSpecks } from './specks.ts';
 import { typedTable } from './typed-table.ts';

@@ -1,5 +1,5 @@
-import type { Zone } from '#shared/document/define-block.ts';
-import { type Line, bottomOf, median, middleOf, rightOf, rowsByHeight, segmentsOf, zoneAround } from './lines.ts';
+import { type Zone, zoneAround } from '#shared/document/define-block.ts';
+import { type Line, bottomOf, median, middleOf, rightOf, rowsByHeight, segmentsOf } from './lines.ts';
 import type { ReadingWord } from './reading.ts';
 import { joinWrapped } from './wrapped-rows.ts';
 

@@ -1,5 +1,6 @@
+import { zoneAround } from '#shared/document/define-block.ts';
 import { type LineKind, classifyLine } from './classify-line.ts';
-import { type Line, lineText, median, middleOf, rightOf, zoneAround } from './lines.ts';
+import { type Line, lineText, median, middleOf, rightOf } from './lines.ts';
 
 /** Lines that belong together, and what the first of them starts. */
 export type Group = { kind: LineKind; lines: Line[] };

@@ -1,17 +1,8 @@
-import type { Zone } from '#shared/document/define-block.ts';
+import { type Zone, zoneAround } from '#shared/document/define-block.ts';
 import type { ReadingWord } from './reading.ts';
 
 /** A line of print: its words from left to right. */
 export type Line = { words: ReadingWord[]; zone: Zone; block: number };
-
-/** The smallest rectangle around the given ones. */
-export function zoneAround(zones: readonly Zone[]): Zone {
-  const left = Math.min(...zones.map(([x]) => x));
-  const top = Math.min(...zones.map(([, y]) => y));
-  const right = Math.max(...zones.map(([x, , w]) => x + w));
-  const bottom = Math.max(...zones.map(([, y, , h]) => y + h));
-  return [left, top, right - left, bottom - top];
-}
 
 export const bottomOf = ([, y, , h]: Zone): number => y + h;
 export const rightOf = ([x, , w]: Zone): number => x + w;

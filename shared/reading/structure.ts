@@ -1,11 +1,11 @@
-import type { DocNode, Zone } from '#shared/document/define-block.ts';
+import { type DocNode, type Zone, zoneAround } from '#shared/document/define-block.ts';
 import type { PageDocument } from '#shared/document/page-document.ts';
 import { currentVersion } from '#shared/document/upgrades.ts';
 import type { LineKind } from './classify-line.ts';
 import { findTables } from './find-tables.ts';
 import { gatherLines } from './gather-lines.ts';
 import { inlineOf } from './inline.ts';
-import { type Line, bottomOf, linesOf, median, middleOf, zoneAround } from './lines.ts';
+import { type Line, bottomOf, linesOf, median, middleOf } from './lines.ts';
 import { overlap } from './picture/figures.ts';
 import type { Reading } from './reading.ts';
 import { withoutSpecks } from './specks.ts';

@@ -1,7 +1,6 @@
-import type { DocNode } from '#shared/document/define-block.ts';
+import { type DocNode, zoneAround } from '#shared/document/define-block.ts';
 import type { FoundRow, FoundTable } from './find-tables.ts';
 import { inlineOf } from './inline.ts';
-import { zoneAround } from './lines.ts';
 import { tableKind } from './type-columns.ts';
 import { type RowRole, typedTable } from './typed-table.ts';
 

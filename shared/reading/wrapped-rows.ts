@@ -1,5 +1,6 @@
+import { zoneAround } from '#shared/document/define-block.ts';
 import type { FoundRow, FoundTable } from './find-tables.ts';
-import { bottomOf, middleOf, rightOf, zoneAround } from './lines.ts';
+import { bottomOf, middleOf, rightOf } from './lines.ts';
 import type { ReadingWord } from './reading.ts';
 
 /** A further line of a row stands this close below it, in letter heights. */

@@ -61,7 +61,16 @@ function findClose({ db, raw }: SearchTools, { manualId, kind }: Query, terms: T
 
 type Marked = ReturnType<typeof markHits> | null;
 
-/** The rows of a search as hits, in the order found; a page's text is left out where a row of its parts list says the same. */
+type Title = { label: string; manualTitle: string };
+type Seen = Pick<SearchHit, 'kind' | 'snippet' | 'marks' | 'boxes' | 'score'>;
+
+const hitOn = (
+  { manualId, pageId }: EntryRow,
+  { label, manualTitle }: Title,
+  { kind, snippet, marks, boxes, score }: Seen,
+): SearchHit => ({ kind, manualId, manualTitle, pageId, label, snippet, marks, boxes, score });
+
+/** The rows of a search as hits, in the order found. */
 function hitsFrom(
   db: Tools['db'],
   found: { id: number; score: number }[],
@@ -79,20 +88,7 @@ function hitsFrom(
     const title = entry === undefined ? undefined : titles.get(entry.pageId);
     const marked = entry === undefined ? null : mark(entry);
     if (entry === undefined || title === undefined || marked === null) return [];
-    const { snippet, marks, boxes } = marked;
-    return [
-      {
-        kind: entry.kind,
-        manualId: entry.manualId,
-        manualTitle: title.manualTitle,
-        pageId: entry.pageId,
-        label: title.label,
-        snippet,
-        marks,
-        boxes,
-        score,
-      },
-    ];
+    return [hitOn(entry, title, { ...marked, kind: entry.kind, score })];
   });
 }
 
@@ -109,23 +105,11 @@ function printedQuantities(db: Tools['db'], q: string, manualId: string | undefi
   return pageEntries(db, pageIds).flatMap((entry): SearchHit[] => {
     const title = titles.get(entry.pageId);
     if (title === undefined) return [];
-    const { snippet, marks, boxes } = markQuantity(
+    const marked = markQuantity(
       entry.placed,
       places.filter(({ pageId }) => pageId === entry.pageId),
     );
-    return [
-      {
-        kind: 'quantity',
-        manualId: entry.manualId,
-        manualTitle: title.manualTitle,
-        pageId: entry.pageId,
-        label: title.label,
-        snippet,
-        marks,
-        boxes,
-        score: quantityScore,
-      },
-    ];
+    return [hitOn(entry, title, { ...marked, kind: 'quantity', score: quantityScore })];
   });
 }
 
