@@ -52,3 +52,9 @@ export type Reading = {
   words: ReadingWord[];
   figures: z.infer<typeof zone>[];
 };
+
+/** Mean confidence, 0 to 100. By letters, not by words: a stray speck must not weigh as much as a line. */
+export function meanConfidence(words: readonly ReadingWord[]): number {
+  const letters = words.reduce((sum, { text }) => sum + text.length, 0);
+  return letters === 0 ? 0 : words.reduce((sum, { text, confidence }) => sum + confidence * text.length, 0) / letters;
+}

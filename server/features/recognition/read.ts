@@ -4,7 +4,7 @@ import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import { shrink } from '#shared/reading/picture/grey.ts';
 import { unreadMargins } from '#shared/reading/picture/margins.ts';
-import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
+import { type Reading, type ReadingWord, type RecipeWish, meanConfidence } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
@@ -87,12 +87,6 @@ function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord
 }
 
 const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;
-
-/** By letters, not by words: a stray speck must not weigh as much as a line. */
-function meanConfidence(words: readonly ReadingWord[]): number {
-  const letters = words.reduce((sum, { text }) => sum + text.length, 0);
-  return letters === 0 ? 0 : words.reduce((sum, { text, confidence }) => sum + confidence * text.length, 0) / letters;
-}
 
 /** Words that are surely words; what the engine made of the strokes of a drawing is not. */
 const surelyWord = 60;

@@ -61,10 +61,11 @@ export async function readMargins(
   return added;
 }
 
-async function readPiece(
+/** Reads one zone, whose box and whose words' boxes are those of the page as shown; the picture is `scale` times as large. */
+export async function readPiece(
   zone: Zone,
   { picture, scale, dpi }: Picture,
-  segmentation: 'line' | 'labels',
+  segmentation: 'line' | 'labels' | 'one-column',
 ): Promise<ReadingWord[]> {
   const [x, y, width, height] = zone.map((each) => Math.round(each * scale)) as Zone;
   const area: Zone = [x - beyond, y - beyond, width + 2 * beyond, height + 2 * beyond];

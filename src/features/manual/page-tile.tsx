@@ -3,7 +3,7 @@ import { Link } from 'react-router';
 import type { PageSummary } from '#shared/api/pages.ts';
 import { imageOf, readPageAgain } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
