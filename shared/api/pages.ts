@@ -2,11 +2,16 @@ import { z } from 'zod';
 import { columnMeanings, tableKinds } from '#shared/document/blocks/table.ts';
 import { zone } from '#shared/document/define-block.ts';
 import { readingBlock, readingWord, recipe, recipeWish, transform } from '#shared/reading/reading.ts';
+import { readingWarning } from '#shared/reading/warnings.ts';
 import { id, listOf, listQuery, manualParams, ok, pageParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 
 export const pageStates = ['waiting', 'reading', 'read', 'failed', 'corrected', 'proofed'] as const;
 export type PageState = (typeof pageStates)[number];
+
+/** Which half of a double-page spread a page is. */
+export const pageHalves = ['whole', 'left', 'right'] as const;
+export type PageHalf = (typeof pageHalves)[number];
 
 export const pageSummary = z.object({
   id,
@@ -17,6 +22,9 @@ export const pageSummary = z.object({
   doubtCount: z.number().int(),
   revision: z.number().int(),
   problem: z.string().nullable(),
+  half: z.enum(pageHalves),
+  /** What the last reading found wrong with the picture. */
+  warnings: z.array(readingWarning),
   /** Changes with the page image, and with nothing else; null until there is one. Goes into the image's address as `v`. */
   imageVersion: z.string().nullable(),
 });

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { zone } from '#shared/document/define-block.ts';
+import type { ReadingWarning } from './warnings.ts';
 
 /** One recognised word: `text` after repair, `raw` as the engine gave it; box in pixels of the page image as read. */
 export const readingWord = z.object({
@@ -32,12 +33,21 @@ export const recipe = z.object({
   flattened: z.boolean(),
   /** How far the page was turned clockwise to stand upright; readings made before this was done have none. */
   turnDegrees: z.literal([0, 90, 180, 270]).optional(),
+  /** Whose words they are: recognised in the picture, or those that the file itself carries, where it has them. */
+  wordsFrom: z.enum(['picture', 'file']).optional(),
 });
 export type Recipe = z.infer<typeof recipe>;
 
 /** The parts of a recipe that an archivist may set by hand; what is left out is decided from the picture. */
 export const recipeWish = recipe
-  .pick({ segmentation: true, skewDegrees: true, rulesRemoved: true, flattened: true, turnDegrees: true })
+  .pick({
+    segmentation: true,
+    skewDegrees: true,
+    rulesRemoved: true,
+    flattened: true,
+    turnDegrees: true,
+    wordsFrom: true,
+  })
   .partial()
   .extend({ skewDegrees: z.number().min(-45).max(45).optional() });
 export type RecipeWish = z.infer<typeof recipeWish>;
@@ -51,6 +61,8 @@ export type Reading = {
   transform: Transform;
   words: ReadingWord[];
   figures: z.infer<typeof zone>[];
+  /** Readings made before pictures were judged have none. */
+  warnings?: ReadingWarning[];
 };
 
 /** Mean confidence, 0 to 100. By letters, not by words: a stray speck must not weigh as much as a line. */

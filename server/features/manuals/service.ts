@@ -43,7 +43,8 @@ export function createManual({ db, now }: Tools, who: Who, given: ManualInput): 
   return manualReply(db, row.id);
 }
 
-type Change = { [K in keyof ManualInput]?: ManualInput[K] | undefined };
+type Changeable = ManualInput & Pick<Manual, 'learns' | 'ownUnits'>;
+type Change = { [K in keyof Changeable]?: Changeable[K] | undefined };
 
 export function updateManual(
   { db }: Tools,

@@ -1,18 +1,29 @@
+import { readFile } from 'node:fs/promises';
 import type { Zone } from '#shared/document/define-block.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import { shrink } from '#shared/reading/picture/grey.ts';
 import { unreadMargins } from '#shared/reading/picture/margins.ts';
+import { gutterOf } from '#shared/reading/picture/spread.ts';
 import { type Reading, type ReadingWord, type RecipeWish, meanConfidence } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
+import { chooseWords, textLayer } from '#shared/reading/text-layer.ts';
+import type { ReadingWarning } from '#shared/reading/warnings.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
 import { type Prepared, analysisDpi, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
 import { readMargins, rereadCells, rereadFigures } from './reread.ts';
 
-export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
+export type ReadInput = {
+  drawn: string;
+  dpi: number;
+  target: string;
+  wish: RecipeWish;
+  /** The words that the source itself carries for the page, as JSON; null where it has none. */
+  layer?: string | null;
+};
 
 /** A drawing has a few labels; a zone that words fill to this share is text that stands close together. */
 const mostWordsInFigure = 0.22;
@@ -32,11 +43,13 @@ export async function readPage(input: ReadInput): Promise<Reading> {
   return turnDegrees === 0 ? reading : readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
 }
 
-async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
+async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, transform } = prepared;
   const read = await recognisedWords(prepared);
-  const { words, figures } = await secondLooks(prepared, read);
+  const { words: mended, figures } = await secondLooks(prepared, read);
+  const filed = layer === null ? null : textLayer.parse(JSON.parse(await readFile(layer, 'utf8')));
+  const { words, wordsFrom, warnings } = chooseWords(mended, filed, { transform, wish: wish.wordsFrom });
   return {
     recipe: {
       engine: engineName,
@@ -47,6 +60,7 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
       rulesRemoved: prepared.rulesRemoved,
       flattened: prepared.flattened,
       turnDegrees: wish.turnDegrees ?? 0,
+      ...(filed === null ? {} : { wordsFrom }),
     },
     confidence: meanConfidence(words),
     width: shown.width,
@@ -54,7 +68,15 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
     transform,
     words,
     figures,
+    warnings: [...warnings, ...spreadWarning(prepared)],
   };
+}
+
+function spreadWarning({ coarse, coarseScale, shown }: Prepared): ReadingWarning[] {
+  const at = gutterOf(coarse, shown.dpi / coarseScale);
+  return at === null
+    ? []
+    : [{ kind: 'double-page', says: `Two pages seem to meet at ${Math.round(at * 100)} % of the width.` }];
 }
 
 const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dpi * scale);

@@ -40,7 +40,7 @@ function withinPage([x, y, w, h]: Zone, { width, height }: Reading): Zone {
   const [left, top] = [Math.max(0, Math.floor(x)), Math.max(0, Math.floor(y))];
   const [right, bottom] = [Math.min(width, Math.ceil(x + w)), Math.min(height, Math.ceil(y + h))];
   if (right - left < smallestPixels || bottom - top < smallestPixels)
-    throw new AppError('invalid-input', `The zone lies outside the page, or is too small to hold a letter.`);
+    throw new AppError('cannot-do', 'The zone lies outside the page, or is too small to hold a letter.');
   return [left, top, right - left, bottom - top];
 }
 

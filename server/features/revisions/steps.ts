@@ -22,8 +22,8 @@ export const structureStep = (tools: Tools): LightStep => ({
     const reading = findReading(db, Number(job.wish?.['readingId']));
     if (page === undefined || reading === undefined || page.readingId === reading.id) return;
     const { content, imageKey } = reading;
-    const { width, height, confidence } = content;
-    const change = { readingId: reading.id, imageKey, width, height, confidence, problem: null };
+    const { width, height, confidence, warnings = [] } = content;
+    const change = { readingId: reading.id, imageKey, width, height, confidence, warnings, problem: null };
     const current = page.revision === 0 ? undefined : findRevision(db, page.id, page.revision);
     const isTheirs = isTouchedByPeople(db, page.id);
     changePage(db, page.id, isTheirs ? change : { ...change, state: 'read' });
