@@ -154,3 +154,25 @@ export const lookAtPage = defineEndpoint({
   params: pageParams,
   reply: ok,
 });
+
+export const dividePage = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/division',
+  summary: 'Divide the picture of a double-page spread: the page becomes its left half, a new page behind it the right',
+  action: 'run-recognition',
+  params: pageParams,
+  body: z.object({ cutShare: z.number().min(0.2).max(0.8).default(0.5) }).optional(),
+  reply: z.object({ items: z.array(pageSummary) }),
+  status: 202,
+});
+
+export const joinPage = defineEndpoint({
+  method: 'delete',
+  path: '/api/pages/:pageId/division',
+  summary:
+    'Take a division back: the two halves of a spread become one page again, as long as nobody has worked on them',
+  action: 'run-recognition',
+  params: pageParams,
+  reply: pageSummary,
+  status: 202,
+});

@@ -91,15 +91,20 @@ function withLayer(read: readonly ReadingWord[], layer: TextLayer, transform: Tr
 
 const covers = ([x, , w]: Zone, [ox, , ow]: Zone): boolean => Math.min(x + w, ox + ow) - Math.max(x, ox) > ow * 0.3;
 
-/** Puts each line that only the layer has behind the last word that was read above it. */
+/** Puts each line that only the layer has behind the line that was read above it. */
 function withOwnLines(words: readonly ReadingWord[], missing: readonly ReadingWord[]): ReadingWord[] {
   const placed = [...words];
   let line = Math.max(0, ...words.map((word) => word.line));
   for (const { words: own, zone: around } of rowsByHeight(missing)) {
     line += 1;
     const above = placed.findLastIndex(({ box }) => middleOf(box) < middleOf(around) && sharesWidth(box, around));
-    const block = placed[above]?.block ?? 0;
-    placed.splice(above + 1, 0, ...own.map((word) => ({ ...word, line, block })));
+    const { block = 0, line: lineAbove = -1 } = placed[above] ?? {};
+    const at =
+      Math.max(
+        above,
+        placed.findLastIndex((word) => word.line === lineAbove),
+      ) + 1;
+    placed.splice(at, 0, ...own.map((word) => ({ ...word, line, block })));
   }
   return placed;
 }
