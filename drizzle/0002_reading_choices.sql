@@ -1,3 +1,11 @@
+CREATE TABLE `lessons` (
+	`page_id` text PRIMARY KEY NOT NULL,
+	`manual_id` text NOT NULL,
+	`content` text NOT NULL,
+	FOREIGN KEY (`page_id`) REFERENCES `pages`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE INDEX `lessons_of_a_manual` ON `lessons` (`manual_id`);--> statement-breakpoint
 DROP INDEX `one_page_of_a_source_page`;--> statement-breakpoint
 ALTER TABLE `pages` ADD `half` text DEFAULT 'whole' NOT NULL;--> statement-breakpoint
 ALTER TABLE `pages` ADD `cut_share` real;--> statement-breakpoint

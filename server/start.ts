@@ -9,7 +9,7 @@ import { openDatabase, projectRoot } from '#server/db/database.ts';
 import { createAuth, createMailer } from '#server/features/accounts/index.ts';
 import { addPagesBy, drawStep } from '#server/features/pages/index.ts';
 import { readStep } from '#server/features/recognition/index.ts';
-import { structureStep } from '#server/features/revisions/index.ts';
+import { learnStep, structureStep, teachStep } from '#server/features/revisions/index.ts';
 import { indexStep } from '#server/features/search/index.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { createSideWorker } from '#server/jobs/side-worker.ts';
@@ -94,6 +94,8 @@ const stepsOf = (tools: Tools): Steps => ({
   'read-page': readStep(tools),
   'structure-page': structureStep(tools),
   'index-page': indexStep(tools),
+  'learn-page': learnStep(tools),
+  'teach-manual': teachStep(tools),
 });
 
 /** Listens, and says under which addresses its own pages are opened: the one configured, this machine's, and the development server's. */

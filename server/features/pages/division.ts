@@ -4,6 +4,7 @@ import type { PageSummary } from '#shared/api/pages.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import {
   jobs,
+  lessons,
   pages,
   quantities,
   readings,
@@ -99,6 +100,7 @@ function removePage(tx: Connection, { id }: PageRow, heirId: string): void {
   tx.delete(jobs).where(eq(jobs.subjectId, id)).run();
   tx.delete(searchEntries).where(eq(searchEntries.pageId, id)).run();
   tx.delete(searchQuantities).where(eq(searchQuantities.pageId, id)).run();
+  tx.delete(lessons).where(eq(lessons.pageId, id)).run();
   tx.delete(revisions).where(eq(revisions.pageId, id)).run();
   tx.delete(readings).where(eq(readings.pageId, id)).run();
   tx.delete(pages).where(eq(pages.id, id)).run();

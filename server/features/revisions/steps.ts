@@ -1,13 +1,13 @@
 import type { PageDocument } from '#shared/document/page-document.ts';
 import { counted } from '#shared/kit/counted.ts';
 import type { Reading } from '#shared/reading/reading.ts';
-import { documentOf } from '#shared/reading/structure.ts';
 import { takeReading } from '#shared/reading/take-reading.ts';
 import { type PageRow, changePage, findPage, tellPage } from '#server/features/pages/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { LightStep } from '#server/jobs/runner.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { type RevisionRow, currentDocument, findReading, findRevision, isTouchedByPeople } from './queries.ts';
+import { habitsOfManual, machineDocument } from './learning.ts';
 import { addRevision, onCurrentPicture } from './service.ts';
 
 /**
@@ -31,7 +31,7 @@ export const structureStep = (tools: Tools): LightStep => ({
     const { document, note } =
       isTheirs && current !== undefined
         ? readAgain(db, { before: page.readingId, after: content, current, page: now })
-        : { document: documentOf(content), note: 'Read from the scan' };
+        : { document: machineDocument(content, habitsOfManual(db, page.manualId)), note: 'Read from the scan' };
     addRevision(tools, db, { page: now, who: null, note, document, origin: 'machine' });
     setImmediate(() => tellPage(tools, page.id));
   },
