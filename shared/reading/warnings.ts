@@ -1,6 +1,19 @@
 import { z } from 'zod';
 
-/** What can be wrong with the picture of a page, and what an archivist may do about it. */
+/** What can be wrong with the picture of a page, in a word or two. */
+export const warningWords: Record<WarningKind, string> = {
+  'nearly-blank': 'nearly blank',
+  'low-resolution': 'coarse picture',
+  soft: 'out of focus',
+  faint: 'pale print',
+  speckled: 'many specks',
+  'turn-unsure': 'which way up?',
+  'low-confidence': 'read with doubt',
+  'double-page': 'two pages?',
+  'text-layer-differs': 'text differs',
+};
+
+/** What an archivist may do about it. */
 export const warningAdvice = {
   'nearly-blank': 'If something is printed there, scan the sheet again; else it may stay as it is.',
   'low-resolution': 'Scan the sheet again at 300 dots an inch, or compare its numbers with the paper one by one.',
