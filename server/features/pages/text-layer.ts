@@ -1,5 +1,6 @@
 import { OPS, type PDFPageProxy, type PageViewport, Util } from 'pdfjs-dist/legacy/build/pdf.mjs';
 import type { Zone } from '#shared/document/define-block.ts';
+import { canonicalLetters } from '#shared/units/definitions.ts';
 import type { TextLayer } from '#shared/reading/text-layer.ts';
 
 /** Fewer words are a stamp or a page number, not the text of the page. */
@@ -48,7 +49,7 @@ function wordsOf(pieces: readonly Piece[]): TextLayer['words'] {
     }
     mayGoOn = !/\s$/.test(piece.text);
   }
-  return words.map((word) => ({ text: word.text.normalize('NFC'), box: boxOf(word) }));
+  return words.map((word) => ({ text: canonicalLetters(word.text.normalize('NFC')), box: boxOf(word) }));
 }
 
 const goesOn = (before: Piece, next: Piece): boolean =>
