@@ -99,9 +99,11 @@ export function ReadAgainPanel({ editor, page, places, onClose }: Props) {
           )}
         </>
       )}
-      <Button className="mt-2" look="quiet" onClick={onClose}>
-        Put away
-      </Button>
+      <div className="mt-2">
+        <Button look="quiet" onClick={onClose}>
+          Put away
+        </Button>
+      </div>
     </section>
   );
 }

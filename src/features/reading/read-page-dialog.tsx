@@ -19,7 +19,7 @@ export function ReadPageDialog({ page }: { page: Page }) {
       width="wide"
       title={`Read page ${page.label} again`}
       intro="What people wrote stays. Words that nobody has touched take the new reading where it is surer; the rest of its news are proposals."
-      trigger={<Button>Read this page again</Button>}
+      trigger={<Button>Read the scan again</Button>}
     >
       {isOpen ? <Choices page={page} onDone={() => setOpen(false)} /> : null}
     </Dialog>
