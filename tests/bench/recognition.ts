@@ -12,11 +12,13 @@ import { textOf } from '#shared/document/text-of.ts';
 import type { Reading, Transform } from '#shared/reading/reading.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
+import { readRealPaper } from './real-paper.ts';
 
 /**
  * Reads generated scans whose text is known and scores what comes out: `npm run bench -- recognition [option=value ...]`.
  * Options: kinds, faces, profiles (lists with commas), seed, count, plain=no to leave the engine's default out,
  * keep=FOLDER to keep pages and results there. The default seed is for looking at figures, never for tuning.
+ * `recognition real` reads scans of real paper instead; only=PART takes those whose name holds it.
  */
 const defaults = {
   kinds: 'text,twocol,freq,parts_ruled,parts_unruled,figure',
@@ -26,6 +28,7 @@ const defaults = {
   count: '1',
   plain: 'yes',
   keep: '',
+  only: '',
 };
 type Options = typeof defaults;
 
@@ -38,6 +41,10 @@ const languageData = path.join(
 );
 
 export async function benchRecognition(args: readonly string[] = []): Promise<string[]> {
+  if (args.includes('real')) {
+    const { plain, keep, only } = optionsFrom(args);
+    return readRealPaper(path.join(scansFolder, 'real'), plainEngine, { plain: plain !== 'no', keep, only });
+  }
   if (!existsSync(generator)) return ['left out: no generator of scans here (set SCANBENCH to its folder)'];
   if (!runs(['--version'])) return ['left out: python3 is not installed (set PYTHON to it)'];
   if (!runs(['-c', 'import cv2, numpy, PIL']))
