@@ -1,4 +1,6 @@
 import type { Zone } from '#shared/document/define-block.ts';
+import { mendBullets } from '#shared/reading/bullets.ts';
+import { inReadingOrder } from '#shared/reading/columns.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
@@ -76,7 +78,7 @@ async function secondLooks(
   const withCells = await rereadCells(withMargins, page);
   const figures = figuresOf(prepared, repairWords(withCells));
   const labelled = await rereadFigures(withCells, figures, { ...page, picture: lined });
-  return { words: mendTables(repairWords(labelled)), figures };
+  return { words: mendBullets(inReadingOrder(mendTables(repairWords(labelled)), figures)), figures };
 }
 
 function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
