@@ -13,6 +13,7 @@ import type { Reading, Transform } from '#shared/reading/reading.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
 import { readRealPaper } from './real-paper.ts';
+import { type Tally, type TrueBlock, tallyStructure, tallyText } from './structure-score.ts';
 
 /**
  * Reads generated scans whose text is known and scores what comes out: `npm run bench -- recognition [option=value ...]`.
@@ -70,7 +71,7 @@ function optionsFrom(args: readonly string[]): Options {
   return { ...defaults, ...Object.fromEntries(given.map(([name, ...rest]) => [name, rest.join('=')])) };
 }
 
-type Truth = { id: string; image: string; kind: string; dpi: number };
+type Truth = { id: string; image: string; kind: string; dpi: number; blocks: TrueBlock[] };
 type Hypothesis = {
   text: string;
   words: { text: string; conf: number; box: number[]; line: number }[];
@@ -89,6 +90,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   const asked = Object.entries(wanted).flatMap(([name, value]) => [`--${name}`, value]);
   execFileSync(python, [generator, 'gen', '--out', pages, '--quiet', ...asked]);
   const spent = { ours: 0, plain: 0 };
+  const structure: Tally = {};
   const engine = options.plain === 'no' ? null : await plainEngine();
   const truths = readdirSync(pages)
     .filter((name) => name.endsWith('.json'))
@@ -99,6 +101,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
       const reading = await readPage({ drawn, dpi: truth.dpi, target: path.join(folder, 'read.jpg'), wish: {} });
       writeFileSync(path.join(folder, `${truth.id}.reading.json`), JSON.stringify(reading));
       writeFileSync(path.join(ours, `${truth.id}.json`), JSON.stringify(hypothesisOf(reading)));
+      tallyStructure(structure, truth.blocks, documentOf(reading));
     });
     if (engine === null) continue;
     spent.plain += await cpuSeconds(async () => {
@@ -110,6 +113,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   return [
     `${truths.length} pages, seed ${seed}, ${profiles}; ours: ${each(spent.ours)}`,
     ...scoresOf(pages, ours),
+    `blocks found as what they are: ${tallyText(structure)}`,
     ...(engine === null
       ? []
       : [
