@@ -17,17 +17,11 @@ export function glyphIn(picture: GreyPicture, zone: Zone, line: LineMeasure): Se
   return { glyph: glyphs[odds.indexOf(likelihood)] ?? '', likelihood };
 }
 
-/** Of two glyphs, how likely the first is, from 0 to 1; null where the ink looks like neither. */
-export function firstOf(
-  [one, other]: readonly [string, string],
-  ...[picture, zone, line]: Parameters<typeof oddsIn>
-): number | null {
-  const odds = oddsIn(picture, zone, line);
-  const [a, b] = [odds?.[glyphs.indexOf(one)] ?? 0, odds?.[glyphs.indexOf(other)] ?? 0];
-  return a + b < leastEither ? null : a / (a + b);
+/** How likely each glyph is for ink that stands on a line of its own, as a small figure of a fraction does. */
+export function oddsOnItsOwn(picture: GreyPicture, zone: Zone): (glyph: string) => number {
+  const odds = oddsIn(picture, zone, { baseline: zone[1] + zone[3], capital: zone[3] });
+  return (glyph) => odds?.[glyphs.indexOf(glyph)] ?? 0;
 }
-
-const leastEither = 0.4;
 
 function oddsIn(picture: GreyPicture, zone: Zone, line: LineMeasure): Float32Array | null {
   const box = inkBox(picture, zone);

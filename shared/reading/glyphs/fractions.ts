@@ -1,16 +1,13 @@
 import type { Zone } from '#shared/document/define-block.ts';
-import { glyphIn } from './classify.ts';
+import { fractionIn } from './fraction-parts.ts';
 import { inkBox } from './patch.ts';
 import type { Look, ReadSymbol } from './spelled.ts';
 
 /** A fraction set as one sign, as wide as this in heights of a capital, comes out as one to three figures or odd letters. */
 const narrowest = 0.72;
-const widest = 1.9;
+const widest = 2.6;
 const bentFraction = /^[0-9VYZvyAIlTxz%$¥/\\|"“”'’)?&]{1,3}$/;
 const bentWord = /^[("']?[0-9VYZvyAIlTxz%$¥/\\|"“”'’)?&]{1,5}[).,;:"”-]*$/;
-const surelyFraction = 0.8;
-const leastOverlap = 0.25;
-const fractionSigns = '½¼¾⅛⅜⅝⅞⅓⅔';
 
 /** A word with the fractions in it, which the engine reads as figures: ½ as 34, 1½ as 174. Null where it shows none. */
 export function fractionsIn(symbols: readonly ReadSymbol[], look: Look): string | null {
@@ -20,23 +17,18 @@ export function fractionsIn(symbols: readonly ReadSymbol[], look: Look): string 
   const parts = piecesOf(symbols, look).map(({ zone, text: read }) => {
     const width = zone[2] / look.measure.capital;
     if (width < narrowest || width > widest || !bentFraction.test(read)) return read;
-    if (!areEntangled(symbols.filter(({ box }) => isOver(box, zone)))) return read;
-    const found = glyphIn(look.picture, zone, look.measure);
-    if (found === null || found.likelihood < surelyFraction || !fractionSigns.includes(found.glyph)) return read;
-    isAnySeen = true;
-    return found.glyph;
+    const found = fractionIn(look.picture, zone, { read, isTall: isTall(zone, look) });
+    isAnySeen ||= found !== null;
+    return found ?? read;
   });
   return isAnySeen ? parts.join('') : null;
 }
 
-const isOver = ([x, , w]: Zone, zone: Zone): boolean => x + w / 2 >= zone[0] - 1 && x + w / 2 <= zone[0] + zone[2] + 1;
-
-/** Figures that merely touch stand side by side; those of a fraction lie one over the other. */
-const areEntangled = (symbols: readonly ReadSymbol[]): boolean =>
-  symbols.slice(1).every(({ box }, at) => {
-    const before = symbols[at]?.box ?? box;
-    return before[0] + before[2] - box[0] > Math.min(before[2], box[2]) * leastOverlap;
-  });
+/** Higher than a capital: the stroke of a fraction often is, and touching figures are not. */
+function isTall(zone: Zone, { picture, measure }: Look): boolean {
+  const box = inkBox(picture, zone);
+  return box !== null && box[3] > measure.capital * 1.1;
+}
 
 type Piece = { zone: Zone; text: string };
 

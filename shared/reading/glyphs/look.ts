@@ -1,7 +1,6 @@
 import type { GreyPicture } from '#shared/reading/picture/grey.ts';
 import type { ReadingWord } from '#shared/reading/reading.ts';
 import { type Seen, glyphIn } from './classify.ts';
-import { flatThrees } from './flat-threes.ts';
 import { fractionsIn } from './fractions.ts';
 import { type Look, type ReadSymbol, type SpelledWord, lineMeasure, zoneOf } from './spelled.ts';
 
@@ -11,7 +10,8 @@ export const sureAbove = 0.9;
 /** What may stand for a sign, and where: `before` and `behind` are what stands next to it, in the word or beside it. */
 type Suspect = { signs: string; read: RegExp; before: RegExp; behind: RegExp };
 const suspects: readonly Suspect[] = [
-  { signs: '±', read: /^[+*£#$%&€§245tf]$/, before: /^[("']?$|[\s(]$/, behind: /^\s?[\d.]/ },
+  { signs: '±', read: /^[+*£#$%&€§]$/, before: /^[("']?$|[\s(]$/, behind: /^\s?[\d.]/ },
+  { signs: '±', read: /^[245tf]$/, before: /^[("']?$|[\s(]$/, behind: /^[\d.]+\s?(%|per)/ },
   {
     signs: 'µ',
     read: /^[punywmhH]$/,
@@ -32,11 +32,8 @@ export function lookedAt(words: readonly SpelledWord[], picture: GreyPicture): R
   const byLine = new Map<number, ReadSymbol[]>();
   for (const { line, symbols } of words) byLine.set(line, [...(byLine.get(line) ?? []), ...symbols]);
   const measures = new Map([...byLine].map(([line, symbols]) => [line, lineMeasure(symbols)]));
-  const threes = flatThrees(words, measures, picture);
   return words.map((word, at) => {
     const { symbols, ...plain } = word;
-    const three = threes.get(word);
-    if (three !== undefined) return { ...plain, seen: three };
     const measure = measures.get(word.line);
     if (measure === null || measure === undefined || symbols.length === 0) return plain;
     const near = { before: besides(words[at - 1], word), next: besides(words[at + 1], word) };
