@@ -12,6 +12,8 @@ export const readingWord = z.object({
   block: z.number().int(),
   /** The text differs from `raw` and the grammar leaves no other reading: not a doubt. */
   sure: z.boolean().optional(),
+  /** What the picture shows, where it was looked at for a sign that the engine cannot write and shows it surely. */
+  seen: z.string().optional(),
 });
 export type ReadingWord = z.infer<typeof readingWord>;
 

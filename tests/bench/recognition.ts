@@ -12,11 +12,14 @@ import { textOf } from '#shared/document/text-of.ts';
 import type { Reading, Transform } from '#shared/reading/reading.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
+import { readRealPaper } from './real-paper.ts';
+import { type Tally, type TrueBlock, tallyStructure, tallyText } from './structure-score.ts';
 
 /**
  * Reads generated scans whose text is known and scores what comes out: `npm run bench -- recognition [option=value ...]`.
  * Options: kinds, faces, profiles (lists with commas), seed, count, plain=no to leave the engine's default out,
  * keep=FOLDER to keep pages and results there. The default seed is for looking at figures, never for tuning.
+ * `recognition real` reads scans of real paper instead; only=PART takes those whose name holds it.
  */
 const defaults = {
   kinds: 'text,twocol,freq,parts_ruled,parts_unruled,figure',
@@ -26,6 +29,7 @@ const defaults = {
   count: '1',
   plain: 'yes',
   keep: '',
+  only: '',
 };
 type Options = typeof defaults;
 
@@ -38,6 +42,10 @@ const languageData = path.join(
 );
 
 export async function benchRecognition(args: readonly string[] = []): Promise<string[]> {
+  if (args.includes('real')) {
+    const { plain, keep, only } = optionsFrom(args);
+    return readRealPaper(path.join(scansFolder, 'real'), plainEngine, { plain: plain !== 'no', keep, only });
+  }
   if (!existsSync(generator)) return ['left out: no generator of scans here (set SCANBENCH to its folder)'];
   if (!runs(['--version'])) return ['left out: python3 is not installed (set PYTHON to it)'];
   if (!runs(['-c', 'import cv2, numpy, PIL']))
@@ -63,7 +71,7 @@ function optionsFrom(args: readonly string[]): Options {
   return { ...defaults, ...Object.fromEntries(given.map(([name, ...rest]) => [name, rest.join('=')])) };
 }
 
-type Truth = { id: string; image: string; kind: string; dpi: number };
+type Truth = { id: string; image: string; kind: string; dpi: number; blocks: TrueBlock[] };
 type Hypothesis = {
   text: string;
   words: { text: string; conf: number; box: number[]; line: number }[];
@@ -82,6 +90,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   const asked = Object.entries(wanted).flatMap(([name, value]) => [`--${name}`, value]);
   execFileSync(python, [generator, 'gen', '--out', pages, '--quiet', ...asked]);
   const spent = { ours: 0, plain: 0 };
+  const structure: Tally = {};
   const engine = options.plain === 'no' ? null : await plainEngine();
   const truths = readdirSync(pages)
     .filter((name) => name.endsWith('.json'))
@@ -92,6 +101,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
       const reading = await readPage({ drawn, dpi: truth.dpi, target: path.join(folder, 'read.jpg'), wish: {} });
       writeFileSync(path.join(folder, `${truth.id}.reading.json`), JSON.stringify(reading));
       writeFileSync(path.join(ours, `${truth.id}.json`), JSON.stringify(hypothesisOf(reading)));
+      tallyStructure(structure, truth.blocks, documentOf(reading));
     });
     if (engine === null) continue;
     spent.plain += await cpuSeconds(async () => {
@@ -103,6 +113,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   return [
     `${truths.length} pages, seed ${seed}, ${profiles}; ours: ${each(spent.ours)}`,
     ...scoresOf(pages, ours),
+    `blocks found as what they are: ${tallyText(structure)}`,
     ...(engine === null
       ? []
       : [

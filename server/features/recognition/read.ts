@@ -1,6 +1,10 @@
 import { readFile } from 'node:fs/promises';
 import type { Zone } from '#shared/document/define-block.ts';
+import { mendBullets } from '#shared/reading/bullets.ts';
+import { inReadingOrder } from '#shared/reading/columns.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
+import { wholeFigures } from '#shared/reading/figure-zones.ts';
+import { lookedAt } from '#shared/reading/glyphs/look.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import { shrink } from '#shared/reading/picture/grey.ts';
@@ -84,7 +88,8 @@ const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dp
 async function recognisedWords(prepared: Prepared): Promise<ReadingWord[]> {
   const { segmentation, scale } = prepared;
   const read = await recognise(prepared.picture, { segmentation, dpi: dpiForEngine(prepared) });
-  return read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
+  const printed = read.filter(({ text }) => text.trim() !== '');
+  return lookedAt(printed, prepared.clean).map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
 }
 
 /** Doubtful cells, drawings and passed-over margins are read on their own; then the whole is mended. */
@@ -96,9 +101,10 @@ async function secondLooks(
   const page = { picture: clean, scale, dpi: dpiForEngine(prepared) };
   const withMargins = await readMargins(read, unreadIn(prepared, read), page);
   const withCells = await rereadCells(withMargins, page);
-  const figures = figuresOf(prepared, repairWords(withCells));
+  const repaired = repairWords(withCells);
+  const figures = wholeFigures(figuresOf(prepared, repaired), withoutSpecks(repaired), prepared.shown.dpi);
   const labelled = await rereadFigures(withCells, figures, { ...page, picture: lined });
-  return { words: mendTables(repairWords(labelled)), figures };
+  return { words: mendBullets(inReadingOrder(mendTables(repairWords(labelled)), figures)), figures };
 }
 
 function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
