@@ -2,13 +2,12 @@ import type { Zone } from '#shared/document/define-block.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
-import { shrink } from '#shared/reading/picture/grey.ts';
 import { unreadMargins } from '#shared/reading/picture/margins.ts';
 import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { engineName, recognise } from './engine.ts';
-import { type Prepared, analysisDpi, prepare } from './prepare.ts';
+import { type Prepared, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
 import { readMargins, rereadCells, rereadFigures } from './reread.ts';
 
@@ -79,11 +78,9 @@ async function secondLooks(
   return { words: mendTables(repairWords(labelled)), figures };
 }
 
-function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
-  const factor = Math.max(1, Math.round((shown.dpi * scale) / analysisDpi));
-  const toShown = factor / scale;
-  const boxes = words.map(({ box }) => scaled(box, 1 / toShown));
-  return unreadMargins(shrink(clean, factor), shown.dpi / toShown, boxes).map((zone) => scaled(zone, toShown));
+function unreadIn({ coarseClean, coarseScale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
+  const boxes = words.map(({ box }) => scaled(box, 1 / coarseScale));
+  return unreadMargins(coarseClean, shown.dpi / coarseScale, boxes).map((zone) => scaled(zone, coarseScale));
 }
 
 const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;

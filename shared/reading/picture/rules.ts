@@ -23,7 +23,7 @@ const shortThinShare = 0.9;
  */
 export function removeRules(picture: GreyPicture, dpi: number): { picture: GreyPicture; rules: Rule[] } {
   const inkBelow = inkThreshold(picture);
-  const cleaned = Uint8Array.from(picture.data);
+  const cleaned = picture.data.slice();
   const rules: Rule[] = [];
   for (const { lighter, gapInches, thinShare } of passes) {
     const threshold = Math.min(225, inkBelow + lighter);
@@ -60,25 +60,44 @@ function removedAlong(picture: GreyPicture, cleaned: Uint8Array, scan: Scan): Ru
 type Run = { start: number; length: number };
 type Lane = { isAcross: boolean; lane: number; threshold: number };
 
-/** Runs of ink along a row or column that are at least so long, with small gaps allowed. */
-function longRuns({ width, height, data }: GreyPicture, lane: Lane & { shortest: number; gap: number }): Run[] {
-  const end = lane.isAcross ? width : height;
-  const stride = lane.isAcross ? 1 : width;
-  const base = lane.isAcross ? lane.lane * width : lane.lane;
+/**
+ * Runs of ink along a row or column that are at least so long, with small gaps allowed. Only places that any such run
+ * must cover are looked at, and the run is followed both ways from there: a page is mostly paper and short strokes.
+ */
+function longRuns(picture: GreyPicture, lane: Lane & { shortest: number; gap: number }): Run[] {
+  const { width, height } = picture;
+  const { isAcross, shortest, gap } = lane;
+  const end = isAcross ? width : height;
   const runs: Run[] = [];
-  let [start, last] = [-1, -1];
-  const close = (): void => {
-    if (start >= 0 && last - start + 1 >= lane.shortest) runs.push({ start, length: last - start + 1 });
-    start = -1;
-  };
-  for (let at = 0; at < end; at += 1) {
-    if ((data[base + at * stride] ?? 255) <= lane.threshold) {
-      if (start < 0) start = at;
-      last = at;
-    } else if (start >= 0 && at - last > lane.gap) close();
+  const step = Math.max(1, shortest - gap - 1);
+  let done = -1;
+  for (let probe = 0; probe < end; probe += step) {
+    if (probe <= done) continue;
+    const run = runAround(picture, lane, probe);
+    if (run === null) continue;
+    done = run.start + run.length - 1;
+    if (run.length >= shortest) runs.push(run);
   }
-  close();
   return runs;
+}
+
+/** The run that covers this place or begins within a gap behind it. */
+function runAround(
+  { width, height, data }: GreyPicture,
+  { isAcross, lane, threshold, gap }: Lane & { gap: number },
+  probe: number,
+): Run | null {
+  const end = isAcross ? width : height;
+  const stride = isAcross ? 1 : width;
+  const base = isAcross ? lane * width : lane;
+  const isInk = (at: number): boolean => (data[base + at * stride] ?? 255) <= threshold;
+  let first = probe;
+  while (first <= probe + gap && !isInk(first)) first += 1;
+  if (first >= end || first > probe + gap) return null;
+  let [start, last] = [first, first];
+  for (let back = first - 1; back >= 0 && start - back <= gap + 1; back -= 1) if (isInk(back)) start = back;
+  for (let next = first + 1; next < end && next - last <= gap + 1; next += 1) if (isInk(next)) last = next;
+  return { start, length: last - start + 1 };
 }
 
 /** The share of a run with paper on both sides: most of a rule, little of a dark patch or a drawing's shading. */
