@@ -64,40 +64,52 @@ type Lane = { isAcross: boolean; lane: number; threshold: number };
  * Runs of ink along a row or column that are at least so long, with small gaps allowed. Only places that any such run
  * must cover are looked at, and the run is followed both ways from there: a page is mostly paper and short strokes.
  */
-function longRuns(picture: GreyPicture, lane: Lane & { shortest: number; gap: number }): Run[] {
-  const { width, height } = picture;
-  const { isAcross, shortest, gap } = lane;
-  const end = isAcross ? width : height;
+function longRuns(
+  { width, height, data }: GreyPicture,
+  { isAcross, lane, threshold, shortest, gap }: Lane & { shortest: number; gap: number },
+): Run[] {
+  const track: Track = {
+    data,
+    end: isAcross ? width : height,
+    stride: isAcross ? 1 : width,
+    base: isAcross ? lane * width : lane,
+    threshold,
+    gap,
+  };
   const runs: Run[] = [];
   const step = Math.max(1, shortest - gap - 1);
-  let done = -1;
-  for (let probe = 0; probe < end; probe += step) {
-    if (probe <= done) continue;
-    const run = runAround(picture, lane, probe);
-    if (run === null) continue;
-    done = run.start + run.length - 1;
-    if (run.length >= shortest) runs.push(run);
+  for (let probe = 0; probe < track.end; probe += step) {
+    const first = inkFrom(track, probe);
+    if (first < 0) continue;
+    const start = followed(track, first, -1);
+    const last = followed(track, first, 1);
+    if (last - start + 1 >= shortest) runs.push({ start, length: last - start + 1 });
+    while (probe + step <= last) probe += step;
   }
   return runs;
 }
 
-/** The run that covers this place or begins within a gap behind it. */
-function runAround(
-  { width, height, data }: GreyPicture,
-  { isAcross, lane, threshold, gap }: Lane & { gap: number },
-  probe: number,
-): Run | null {
-  const end = isAcross ? width : height;
-  const stride = isAcross ? 1 : width;
-  const base = isAcross ? lane * width : lane;
-  const isInk = (at: number): boolean => (data[base + at * stride] ?? 255) <= threshold;
-  let first = probe;
-  while (first <= probe + gap && !isInk(first)) first += 1;
-  if (first >= end || first > probe + gap) return null;
-  let [start, last] = [first, first];
-  for (let back = first - 1; back >= 0 && start - back <= gap + 1; back -= 1) if (isInk(back)) start = back;
-  for (let next = first + 1; next < end && next - last <= gap + 1; next += 1) if (isInk(next)) last = next;
-  return { start, length: last - start + 1 };
+/** One row or column of a picture. */
+type Track = { data: Uint8Array; end: number; stride: number; base: number; threshold: number; gap: number };
+
+/** The first ink from here on, no farther than a gap; -1 where there is none. */
+function inkFrom({ data, end, stride, base, threshold, gap }: Track, probe: number): number {
+  const last = Math.min(end - 1, probe + gap);
+  for (let at = probe; at <= last; at += 1) if ((data[base + at * stride] ?? 255) <= threshold) return at;
+  return -1;
+}
+
+/** The last ink this way, over gaps that are small enough. */
+function followed({ data, end, stride, base, threshold, gap }: Track, from: number, by: 1 | -1): number {
+  let last = from;
+  let paper = 0;
+  for (let at = from + by; at >= 0 && at < end && paper <= gap; at += by) {
+    if ((data[base + at * stride] ?? 255) <= threshold) {
+      last = at;
+      paper = 0;
+    } else paper += 1;
+  }
+  return last;
 }
 
 /** The share of a run with paper on both sides: most of a rule, little of a dark patch or a drawing's shading. */
