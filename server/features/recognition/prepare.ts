@@ -5,6 +5,7 @@ import { hasTwoColumns } from '#shared/reading/picture/layout.ts';
 import { removeLeaders } from '#shared/reading/picture/leaders.ts';
 import { medianFiltered } from '#shared/reading/picture/median.ts';
 import { removePatches } from '#shared/reading/picture/patches.ts';
+import { type PictureQuality, pictureQuality } from '#shared/reading/picture/quality.ts';
 import { removeRules } from '#shared/reading/picture/rules.ts';
 import { skewDegrees } from '#shared/reading/picture/skew.ts';
 import { drawnAnew } from '#shared/reading/picture/straighten.ts';
@@ -27,6 +28,7 @@ export type Prepared = {
   shown: { width: number; height: number; dpi: number };
   transform: Transform;
   skew: number;
+  quality: PictureQuality;
   /** Encoded for the engine, at `scale` times the size of the picture as read. */
   picture: Buffer;
   /** The same, not encoded: cells that are read once more are cut from it. */
@@ -59,15 +61,16 @@ export async function prepare(
   const raw = await upright.raw().toBuffer({ resolveWithObject: true });
   const grey = await greyOf(raw);
   const even = (wish.flattened ?? true) ? removePatches(flatten(grey), dpi * size) : grey;
+  const quality = pictureQuality(grey, even, dpi * size);
   const skew = wish.skewDegrees ?? skewDegrees(shrink(even, Math.max(1, Math.round((dpi * size) / analysisDpi))));
   const lean = Math.abs(skew) < leastSkewDegrees ? 0 : skew;
   const shown = { ...(await written(raw, lean, target)), dpi: dpi * size };
   // Made even before it is turned: the white corners that turning adds would otherwise pull the paper beside them down.
-  const straight = lean === 0 ? even : drawnAnew(even, shown, backToDrawn(shrunk, shown, { lean, size: 1 }));
-  const engine = forEngine(await atReadingSize(straight, shown.dpi), wish);
+  const back = backToDrawn(shrunk, shown, { lean, size: 1 });
+  const engine = forEngine(await atReadingSize(even, { shown, back, lean }), wish);
   const leant = backToDrawn(shrunk, shown, { lean, size });
   const transform = composed(leant, backFrom(turn, turnedSize({ width, height }, turn)));
-  return { shown, skew: lean, transform, ...engine };
+  return { shown, skew: lean, transform, quality, ...engine };
 }
 
 const sharpOf = ({ width, height, data }: GreyPicture): Sharp =>
@@ -116,11 +119,26 @@ async function greyOf(raw: Raw): Promise<GreyPicture> {
 type Sized = GreyPicture & { scale: number; dpi: number };
 
 /** Fine scans lose their specks to a median filter; in coarse ones it would take thin strokes too, so they are only enlarged. */
-async function atReadingSize(picture: GreyPicture, dpi: number): Promise<Sized> {
-  if (dpi >= coarsestDpi) return { ...medianFiltered(picture), scale: 1, dpi: Math.round(dpi) };
+async function atReadingSize(
+  picture: GreyPicture,
+  { shown, back, lean }: { shown: Size & { dpi: number }; back: Transform; lean: number },
+): Promise<Sized> {
+  const { dpi } = shown;
+  if (dpi >= coarsestDpi) {
+    const scale = Math.min(1, Number(process.env['RD'] ?? 250) / dpi);
+    const size = { width: Math.round(shown.width * scale), height: Math.round(shown.height * scale) };
+    const shrinking: Transform = [
+      [1 / scale, 0, 0],
+      [0, 1 / scale, 0],
+    ];
+    const filtered = medianFiltered(picture);
+    const straight = lean === 0 && scale === 1 ? filtered : drawnAnew(filtered, size, composed(shrinking, back));
+    return { ...straight, scale, dpi: Math.round(dpi * scale) };
+  }
+  const straight = lean === 0 ? picture : drawnAnew(picture, shown, back);
   const scale = readingDpi / dpi;
-  const width = Math.round(picture.width * scale);
-  const enlarged = sharpOf(picture).resize({ width, kernel: 'cubic' }).raw();
+  const width = Math.round(straight.width * scale);
+  const enlarged = sharpOf(straight).resize({ width, kernel: 'cubic' }).raw();
   return { ...(await greyOf(await enlarged.toBuffer({ resolveWithObject: true }))), scale, dpi: readingDpi };
 }
 
@@ -128,7 +146,7 @@ async function atReadingSize(picture: GreyPicture, dpi: number): Promise<Sized> 
 export const encoded = ({ width, height, data }: GreyPicture): Buffer =>
   Buffer.concat([Buffer.from(`P5\n${width} ${height}\n255\n`, 'latin1'), data]);
 
-type EnginePart = Omit<Prepared, 'shown' | 'transform' | 'skew'>;
+type EnginePart = Omit<Prepared, 'shown' | 'transform' | 'skew' | 'quality'>;
 
 function forEngine({ scale, dpi, ...flat }: Sized, wish: RecipeWish): EnginePart {
   const rulesRemoved = wish.rulesRemoved ?? true;

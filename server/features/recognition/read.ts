@@ -6,6 +6,7 @@ import { unreadMargins } from '#shared/reading/picture/margins.ts';
 import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
+import { isNearlyBlank, surelyRead, warningsOf, withTurnUnsure } from '#shared/reading/warnings.ts';
 import { engineName, recognise } from './engine.ts';
 import { type Prepared, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
@@ -27,15 +28,21 @@ export async function readPage(input: ReadInput): Promise<Reading> {
   const { drawn, dpi, wish } = input;
   const reading = await readAsItLies(input);
   if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove) return reading;
-  const turnDegrees = await uprightTurn(drawn, dpi);
-  return turnDegrees === 0 ? reading : readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
+  const { turn: turnDegrees, isSure } = await uprightTurn(drawn, dpi);
+  if (turnDegrees !== 0) return readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
+  return isSure ? reading : { ...reading, warnings: withTurnUnsure(reading) };
 }
 
 async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, transform } = prepared;
   const read = await recognisedWords(prepared);
-  const { words, figures } = await secondLooks(prepared, read);
+  const looked = await secondLooks(prepared, read);
+  const { quality } = prepared;
+  const { figures } = looked;
+  const isBlank = figures.length === 0 && isNearlyBlank(quality, looked.words);
+  const words = isBlank ? surelyRead(looked.words) : looked.words;
+  const confidence = meanConfidence(words);
   return {
     recipe: {
       engine: engineName,
@@ -47,12 +54,13 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
       flattened: prepared.flattened,
       turnDegrees: wish.turnDegrees ?? 0,
     },
-    confidence: meanConfidence(words),
+    confidence,
     width: shown.width,
     height: shown.height,
     transform,
     words,
     figures,
+    warnings: warningsOf({ dpi, quality, words, confidence }),
   };
 }
 
