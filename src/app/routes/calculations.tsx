@@ -47,7 +47,7 @@ export function Component() {
           }
           under={[manual.maker, manual.documentNumber].filter(Boolean).join(', ') || undefined}
         />
-        <div className="my-4">
+        <div className="mb-4">
           <SettingBar manualId={manual.id} startsOpen={false} />
         </div>
         <Tabs
