@@ -60,7 +60,9 @@ async function readAsProduct(file: string, scratch: string): Promise<Read> {
     path: file,
     mediaType: `image/${path.extname(file).slice(1)}`,
     sourcePage: 0,
+    part: null,
     target: drawn,
+    layerTarget: path.join(scratch, 'layer.json'),
     mostMegapixels: 120,
   });
   const reading = await readPage({ drawn, dpi, target: path.join(scratch, 'read.jpg'), wish: {} });
