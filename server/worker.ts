@@ -31,6 +31,8 @@ async function answer({ id, task, input }: WorkerRequest): Promise<WorkerReply> 
 
 // Each page is another picture: nothing that the library keeps would be asked for again.
 sharp.cache(false);
+// One page at a time in each of several processes: more threads in one only take turns, and each holds memory.
+sharp.concurrency(1);
 
 process.on('message', (request: WorkerRequest) => {
   void answer(request).then((reply) => {

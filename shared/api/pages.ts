@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { columnMeanings, tableKinds } from '#shared/document/blocks/table.ts';
 import { zone } from '#shared/document/define-block.ts';
 import { readingBlock, readingWord, recipe, recipeWish, transform } from '#shared/reading/reading.ts';
-import { readingWarning } from '#shared/reading/warnings.ts';
+import { readingWarning } from '#shared/reading/page-warning.ts';
 import { id, listOf, listQuery, manualParams, ok, pageParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 
@@ -131,6 +131,7 @@ export const getPageReading = defineEndpoint({
     transform,
     words: z.array(readingWord),
     blocks: z.array(readingBlock),
+    warnings: z.array(readingWarning).optional(),
     createdAt: time,
   }),
 });

@@ -17,7 +17,8 @@ export const quantityChange = z.record(z.string(), z.unknown()).meta({
 });
 
 const one = manualParams.extend({ quantityId: id });
-const inputs = z.record(z.string(), z.union([z.number(), z.string().max(120)]));
+/** One value for each input that is away from home. */
+export const inputs = z.record(z.string(), z.union([z.number(), z.string().max(120)]));
 
 export const listQuantities = defineEndpoint({
   method: 'get',

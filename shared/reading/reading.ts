@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { zone } from '#shared/document/define-block.ts';
-import type { ReadingWarning } from './warnings.ts';
+import type { ReadingWarning } from './page-warning.ts';
 
 /** One recognised word: `text` after repair, `raw` as the engine gave it; box in pixels of the page image as read. */
 export const readingWord = z.object({
@@ -63,7 +63,7 @@ export type Reading = {
   transform: Transform;
   words: ReadingWord[];
   figures: z.infer<typeof zone>[];
-  /** Readings made before pictures were judged have none. */
+  /** What is amiss with the picture or the reading; readings made before this was judged have none. */
   warnings?: ReadingWarning[];
 };
 

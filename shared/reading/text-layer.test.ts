@@ -43,7 +43,7 @@ describe('the words that a file carries for a page', () => {
     const other = printed.map((line) => line.replace(/[a-z]{3,}/g, (word) => [...word].reverse().join('')));
     const { words, wordsFrom, warnings } = choose(layerOf(other));
     expect({ text: textOf(words), wordsFrom }).toEqual({ text: textOf(read), wordsFrom: 'picture' });
-    expect(warnings).toMatchObject([{ kind: 'text-layer-differs' }]);
+    expect(warnings).toMatchObject([{ kind: 'text-differs' }]);
   });
 
   it('are not taken unasked where they lie hidden behind a scan, and can be asked for', () => {

@@ -3,7 +3,7 @@ import { type Zone, zone, zoneAround } from '#shared/document/define-block.ts';
 import { between } from '#shared/document/zones.ts';
 import { linesOf, median, middleOf, rightOf, rowsByHeight } from './lines.ts';
 import type { ReadingWord, Recipe, Transform } from './reading.ts';
-import type { ReadingWarning } from './warnings.ts';
+import type { ReadingWarning } from './page-warning.ts';
 
 /** The words that a file itself carries for a page. Boxes are in pixels of the picture as drawn. */
 export const textLayer = z.object({
@@ -132,6 +132,6 @@ export function chooseWords(
   if (!layer.isPainted) return asRead;
   const share = agreement(read, layer, transform) ?? 1;
   if (share >= agrees) return asFiled;
-  const says = `Only ${Math.round(share * 100)} % of the words that were read surely stand in the file's own text as well.`;
-  return { ...asRead, warnings: [{ kind: 'text-layer-differs', says }] };
+  const detail = `${Math.round(share * 100)} % of the words that were read surely stand in the file's own text`;
+  return { ...asRead, warnings: [{ kind: 'text-differs', detail }] };
 }

@@ -1,36 +1,68 @@
-import { z } from 'zod';
+import type { PictureQuality } from './picture/quality.ts';
+import type { ReadingWarning, WarningKind } from './page-warning.ts';
+import type { Reading, ReadingWord } from './reading.ts';
+import { withoutSpecks } from './specks.ts';
 
-/** What can be wrong with the picture of a page, in a word or two. */
-export const warningWords: Record<WarningKind, string> = {
-  'nearly-blank': 'nearly blank',
-  'low-resolution': 'coarse picture',
-  soft: 'out of focus',
-  faint: 'pale print',
-  speckled: 'many specks',
-  'turn-unsure': 'which way up?',
-  'low-confidence': 'read with doubt',
-  'double-page': 'two pages?',
-  'text-layer-differs': 'text differs',
+export type Evidence = {
+  /** Dots an inch of the scan as delivered. */
+  dpi: number;
+  quality: PictureQuality;
+  words: readonly ReadingWord[];
+  /** Mean confidence by letters, 0 to 100. */
+  confidence: number;
 };
 
-/** What an archivist may do about it. */
-export const warningAdvice = {
-  'nearly-blank': 'If something is printed there, scan the sheet again; else it may stay as it is.',
-  'low-resolution': 'Scan the sheet again at 300 dots an inch, or compare its numbers with the paper one by one.',
-  soft: 'The print is out of focus. Scan the sheet again, flat on the glass.',
-  faint: 'The print is pale. Scan the sheet again, darker.',
-  speckled: 'The picture is full of specks. Clean the glass or scan in grey instead of black and white.',
-  'turn-unsure': 'Look whether the page stands upright, and turn it by hand if it does not.',
-  'low-confidence': 'Much of this page was read with doubt. Compare it with the paper, or scan the sheet again.',
-  'double-page': 'If these are two pages side by side, divide the picture.',
-  'text-layer-differs': 'The text that came with the file differs from what is printed. It was read afresh.',
-} as const satisfies Record<string, string>;
+// Limits lie between generated scans that read well and those that do not: ones of good and medium quality at 300 dots an
+// inch keep clear of all of them, bad ones are over two or three.
+const coarseBelowDpi = 180;
+const softAbovePixels = 6.8;
+const faintBelow = 72;
+const speckledAbove = 30;
+const unevenAbove = 80;
+const doubtfulBelow = 80;
 
-export type WarningKind = keyof typeof warningAdvice;
+/** The warnings about a page, the picture's first. */
+export function warningsOf({ dpi, quality, words, confidence }: Evidence): ReadingWarning[] {
+  const isBlank = isNearlyBlank(quality, words);
+  const rows: readonly [WarningKind, boolean, string][] = [
+    ['nearly-blank', isBlank, `${(quality.inkShare * 100).toFixed(2)} % of the page is ink`],
+    ['low-resolution', dpi < coarseBelowDpi, `${Math.round(dpi)} dots an inch`],
+    ['soft', !isBlank && quality.edgePixels > softAbovePixels, `edges ${quality.edgePixels.toFixed(1)} pixels wide`],
+    ['faint', !isBlank && quality.contrast < faintBelow, `contrast ${Math.round(quality.contrast)} of 255`],
+    [
+      'speckled',
+      quality.specksPerSquareInch > speckledAbove,
+      `${Math.round(quality.specksPerSquareInch)} specks a square inch`,
+    ],
+    ['uneven', quality.paperSpread > unevenAbove, `paper differs by ${Math.round(quality.paperSpread)} of 255`],
+    ['low-confidence', !isBlank && confidence < doubtfulBelow, `mean confidence ${Math.round(confidence)}`],
+  ];
+  return rows.flatMap(([kind, holds, detail]) => (holds ? [{ kind, detail }] : []));
+}
 
-/** Something that is wrong with the picture of a page: `says` states what was found, with its figure. */
-export const readingWarning = z.object({
-  kind: z.enum(Object.keys(warningAdvice) as [WarningKind]),
-  says: z.string(),
-});
-export type ReadingWarning = z.infer<typeof readingWarning>;
+/** The warnings about a page that no turn made clearly better; a blank page lies as it may. */
+export function withTurnUnsure({
+  warnings = [],
+  confidence,
+}: Pick<Reading, 'warnings' | 'confidence'>): ReadingWarning[] {
+  if (warnings.some(({ kind }) => kind === 'nearly-blank')) return warnings;
+  return [{ kind: 'turn-unsure', detail: `mean confidence ${Math.round(confidence)} as it lies` }, ...warnings];
+}
+
+/** A page of print inks 3 % and more; a lone page number and dirt come to less than this. */
+const littleInk = 0.004;
+const fewLetters = 12;
+const surelyWord = 70;
+
+/** Whether a page bears no print but perhaps a page number: little ink, and hardly a letter that was read surely. */
+export function isNearlyBlank({ inkShare, contrast }: PictureQuality, words: readonly ReadingWord[]): boolean {
+  const letters = surelyRead(words).reduce((sum, { text }) => sum + text.length, 0);
+  return letters < fewLetters && (inkShare < littleInk || contrast < grainBelow || words.length === 0);
+}
+
+/** Where there is no ink, the threshold parts paper from its own grain. */
+const grainBelow = 40;
+
+/** On a page that is nearly blank what was read with doubt is dirt. */
+export const surelyRead = (words: readonly ReadingWord[]): ReadingWord[] =>
+  withoutSpecks(words).filter(({ confidence, text }) => confidence >= surelyWord && /[\p{L}\p{N}]/u.test(text));

@@ -28,6 +28,7 @@ export const router = createBrowserRouter([
         children: [
           { index: true, ...fetched(() => import('./routes/library.tsx')) },
           { path: '/manuals/:manualId', ...fetched(() => import('./routes/manual.tsx')) },
+          { path: '/manuals/:manualId/calculations', ...fetched(() => import('./routes/calculations.tsx')) },
           { path: '/pages/:pageId', ...fetched(() => import('./routes/page-workspace.tsx')) },
           { path: '/pages/:pageId/read', ...fetched(() => import('./routes/reading-view.tsx')) },
           { path: '/search', ...fetched(() => import('./routes/search.tsx')) },

@@ -145,3 +145,21 @@ describe('settings', () => {
     expect((await technician.delete(at(`settings/${made.body.id}`))).status).toBe(200);
   });
 });
+
+describe('the change sheet', () => {
+  it('lists what differs between two settings, also as a file', async () => {
+    const asked = { after: { channel: 16 } };
+    const { status, body } = await editor.post(at('change-sheet'), asked);
+    expect(status).toBe(200);
+    expect(body.rows.map(({ symbol, before, after }: any) => [symbol, before, after])).toContainEqual([
+      'crystal',
+      '16.211111 mc',
+      '16.233333 mc',
+    ]);
+    expect(body).toMatchObject({ leaving: 0, unavailable: 0 });
+    const file = await editor.post(`${at('change-sheet')}?format=csv`, asked);
+    expect(file.headers['content-type']).toContain('text/csv');
+    expect(file.text).toContain('crystal,Crystal,16.211111 mc,16.211111 mc,16.233333 mc');
+    expect((await editor.post(at('change-sheet'), { after: { channel: { a: 1 } } })).status).toBe(400);
+  });
+});

@@ -3,6 +3,7 @@ import { existsSync, mkdirSync, mkdtempSync, readFileSync, readdirSync, rmSync, 
 import { createRequire } from 'node:module';
 import os from 'node:os';
 import path from 'node:path';
+import sharp from 'sharp';
 import Tesseract, { OEM, type Worker } from 'tesseract.js';
 import { projectRoot } from '#server/db/database.ts';
 import { readPage } from '#server/features/recognition/read.ts';
@@ -95,6 +96,11 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   const truths = readdirSync(pages)
     .filter((name) => name.endsWith('.json'))
     .map((name) => JSON.parse(readFileSync(path.join(pages, name), 'utf8')) as Truth);
+  // As the worker process does; and the first page of each, which compiles and warms up, does not count.
+  sharp.cache(false);
+  sharp.concurrency(1);
+  const [first] = truths;
+  if (first !== undefined) await warmUp(path.join(pages, first.image), { folder, engine });
   for (const truth of truths) {
     const drawn = path.join(pages, truth.image);
     spent.ours += await cpuSeconds(async () => {
@@ -122,6 +128,11 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
           ...scoresOf(pages, plain),
         ]),
   ];
+}
+
+async function warmUp(drawn: string, { folder, engine }: { folder: string; engine: Worker | null }): Promise<void> {
+  await readPage({ drawn, dpi: 300, target: path.join(folder, 'read.jpg'), wish: {} });
+  if (engine !== null) await readPlainly(engine, drawn);
 }
 
 async function cpuSeconds(work: () => Promise<void>): Promise<number> {

@@ -1,7 +1,7 @@
 import { index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import type { PageHalf, PageState } from '#shared/api/pages.ts';
 import type { Reading } from '#shared/reading/reading.ts';
-import type { ReadingWarning } from '#shared/reading/warnings.ts';
+import type { ReadingWarning } from '#shared/reading/page-warning.ts';
 import { manuals, sources } from './manuals.ts';
 
 export const pages = sqliteTable(

@@ -1,12 +1,14 @@
-import sharp, { type Sharp } from 'sharp';
+import sharp, { type OutputInfo, type Sharp } from 'sharp';
 import { flatten } from '#shared/reading/picture/flatten.ts';
 import { type GreyPicture, shrink } from '#shared/reading/picture/grey.ts';
 import { hasTwoColumns } from '#shared/reading/picture/layout.ts';
 import { removeLeaders } from '#shared/reading/picture/leaders.ts';
 import { medianFiltered } from '#shared/reading/picture/median.ts';
 import { removePatches } from '#shared/reading/picture/patches.ts';
+import { type PictureQuality, pictureQuality } from '#shared/reading/picture/quality.ts';
 import { removeRules } from '#shared/reading/picture/rules.ts';
 import { skewDegrees } from '#shared/reading/picture/skew.ts';
+import { drawnAnew } from '#shared/reading/picture/straighten.ts';
 import { type Turn, backFrom, composed, isQuarter } from '#shared/reading/picture/turn.ts';
 import type { RecipeWish, Transform } from '#shared/reading/reading.ts';
 import type { Segmentation } from './engine.ts';
@@ -15,7 +17,7 @@ import type { Segmentation } from './engine.ts';
 const readingDpi = 300;
 const finestDpi = 400;
 const coarsestDpi = 250;
-export const analysisDpi = 100;
+const analysisDpi = 100;
 /** A page that leans less than this is left as it is: turning it would only soften it. */
 const leastSkewDegrees = 0.08;
 /** Best codes for each picture would save 3 % of its size for eight times the time. */
@@ -26,6 +28,7 @@ export type Prepared = {
   shown: { width: number; height: number; dpi: number };
   transform: Transform;
   skew: number;
+  quality: PictureQuality;
   /** Encoded for the engine, at `scale` times the size of the picture as read. */
   picture: Buffer;
   /** The same, not encoded: cells that are read once more are cut from it. */
@@ -38,6 +41,8 @@ export type Prepared = {
   flattened: boolean;
   /** About 100 dots an inch, with its rules in place, for finding drawings; `coarseScale` takes it to the picture as read. */
   coarse: GreyPicture;
+  /** The same without its rules. */
+  coarseClean: GreyPicture;
   coarseScale: number;
 };
 
@@ -51,34 +56,59 @@ export async function prepare(
   const { width, height } = turnedSize(await sharp(drawn).metadata(), turn);
   const size = dpi > finestDpi ? readingDpi / dpi : 1;
   const shrunk = { width: Math.round(width * size), height: Math.round(height * size) };
-  const { data, info } = await sharp(drawn)
-    .rotate(turn)
-    .resize(shrunk.width, shrunk.height, { fit: 'fill' })
-    .raw()
-    .toBuffer({ resolveWithObject: true });
-  const colour = (): Sharp => sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels } });
-  const grey = await greyOf(colour());
+  const upright = sharp(drawn).rotate(turn);
+  if (size !== 1) upright.resize(shrunk.width, shrunk.height, { fit: 'fill' });
+  const raw = await upright.raw().toBuffer({ resolveWithObject: true });
+  const grey = await greyOf(raw);
   const even = (wish.flattened ?? true) ? removePatches(flatten(grey), dpi * size) : grey;
+  const quality = pictureQuality(grey, even, dpi * size);
   const skew = wish.skewDegrees ?? skewDegrees(shrink(even, Math.max(1, Math.round((dpi * size) / analysisDpi))));
   const lean = Math.abs(skew) < leastSkewDegrees ? 0 : skew;
-  const written = await colour()
-    .rotate(-lean, { background: 'white' })
-    .jpeg({ quality: jpegQuality, chromaSubsampling: '4:4:4', optimiseCoding: false })
-    .toFile(target);
-  const shown = { width: written.width, height: written.height, dpi: dpi * size };
+  const shown = { ...(await written(raw, lean, target)), dpi: dpi * size };
   // Made even before it is turned: the white corners that turning adds would otherwise pull the paper beside them down.
-  const straight = lean === 0 ? even : await greyOf(sharpOf(even).rotate(-lean, { background: 'white' }));
-  const engine = forEngine(await atReadingSize(straight, shown.dpi), wish);
+  const back = backToDrawn(shrunk, shown, { lean, size: 1 });
+  const engine = forEngine(await atReadingSize(even, { shown, back, lean }), wish);
   const leant = backToDrawn(shrunk, shown, { lean, size });
   const transform = composed(leant, backFrom(turn, turnedSize({ width, height }, turn)));
-  return { shown, skew: lean, transform, ...engine };
+  return { shown, skew: lean, transform, quality, ...engine };
 }
 
 const sharpOf = ({ width, height, data }: GreyPicture): Sharp =>
   sharp(data, { raw: { width, height, channels: 1 } }).toColourspace('b-w');
 
-async function greyOf(picture: Sharp): Promise<GreyPicture> {
-  const { data, info } = await picture.greyscale().toColourspace('b-w').raw().toBuffer({ resolveWithObject: true });
+type Raw = { data: Buffer; info: OutputInfo };
+
+const opened = ({ data, info: { width, height, channels } }: Raw): Sharp =>
+  sharp(data, { raw: { width, height, channels } });
+
+/** Writes the page image for people, straightened. */
+async function written(raw: Raw, lean: number, target: string): Promise<Size> {
+  const { width, height } = await straightened(raw, lean)
+    .jpeg({ quality: jpegQuality, chromaSubsampling: '4:4:4', optimiseCoding: false })
+    .toFile(target);
+  return { width, height };
+}
+
+function straightened(raw: Raw, lean: number): Sharp {
+  if (lean === 0) return opened(raw);
+  const { data, info } = raw;
+  if (info.channels !== 1) return opened(raw).rotate(-lean, { background: 'white' });
+  const size = turnedBy(info, lean);
+  return sharpOf(drawnAnew({ ...info, data }, size, backToDrawn(info, size, { lean, size: 1 })));
+}
+
+/** The size of a sheet that holds another one turned by some degrees. */
+function turnedBy({ width, height }: Size, degrees: number): Size {
+  const [cos, sin] = [Math.cos, Math.sin].map((of) => Math.abs(of((degrees * Math.PI) / 180))) as [number, number];
+  return { width: Math.round(width * cos + height * sin), height: Math.round(width * sin + height * cos) };
+}
+
+async function greyOf(raw: Raw): Promise<GreyPicture> {
+  const one =
+    raw.info.channels === 1
+      ? raw
+      : await opened(raw).greyscale().toColourspace('b-w').raw().toBuffer({ resolveWithObject: true });
+  const { data, info } = one;
   return {
     width: info.width,
     height: info.height,
@@ -89,26 +119,42 @@ async function greyOf(picture: Sharp): Promise<GreyPicture> {
 type Sized = GreyPicture & { scale: number; dpi: number };
 
 /** Fine scans lose their specks to a median filter; in coarse ones it would take thin strokes too, so they are only enlarged. */
-async function atReadingSize(picture: GreyPicture, dpi: number): Promise<Sized> {
-  if (dpi >= coarsestDpi) return { ...medianFiltered(picture), scale: 1, dpi: Math.round(dpi) };
+async function atReadingSize(
+  picture: GreyPicture,
+  { shown, back, lean }: { shown: Size & { dpi: number }; back: Transform; lean: number },
+): Promise<Sized> {
+  const { dpi } = shown;
+  if (dpi >= coarsestDpi) {
+    const scale = Math.min(1, Number(process.env['RD'] ?? 250) / dpi);
+    const size = { width: Math.round(shown.width * scale), height: Math.round(shown.height * scale) };
+    const shrinking: Transform = [
+      [1 / scale, 0, 0],
+      [0, 1 / scale, 0],
+    ];
+    const filtered = medianFiltered(picture);
+    const straight = lean === 0 && scale === 1 ? filtered : drawnAnew(filtered, size, composed(shrinking, back));
+    return { ...straight, scale, dpi: Math.round(dpi * scale) };
+  }
+  const straight = lean === 0 ? picture : drawnAnew(picture, shown, back);
   const scale = readingDpi / dpi;
-  const width = Math.round(picture.width * scale);
-  return { ...(await greyOf(sharpOf(picture).resize({ width, kernel: 'cubic' }))), scale, dpi: readingDpi };
+  const width = Math.round(straight.width * scale);
+  const enlarged = sharpOf(straight).resize({ width, kernel: 'cubic' }).raw();
+  return { ...(await greyOf(await enlarged.toBuffer({ resolveWithObject: true }))), scale, dpi: readingDpi };
 }
 
 /** As a portable grey map, the least work for both sides: nothing is compressed only to be unpacked again. */
 export const encoded = ({ width, height, data }: GreyPicture): Buffer =>
   Buffer.concat([Buffer.from(`P5\n${width} ${height}\n255\n`, 'latin1'), data]);
 
-type EnginePart = Omit<Prepared, 'shown' | 'transform' | 'skew'>;
+type EnginePart = Omit<Prepared, 'shown' | 'transform' | 'skew' | 'quality'>;
 
 function forEngine({ scale, dpi, ...flat }: Sized, wish: RecipeWish): EnginePart {
   const rulesRemoved = wish.rulesRemoved ?? true;
   const ruleless = rulesRemoved ? removeRules(flat, dpi).picture : flat;
   const clean = removeLeaders(ruleless, dpi).picture;
   const factor = Math.max(1, Math.round(dpi / analysisDpi));
-  const segmentation =
-    wish.segmentation ?? (hasTwoColumns(shrink(clean, factor), dpi / factor) ? 'columns' : 'one-column');
+  const coarseClean = shrink(clean, factor);
+  const segmentation = wish.segmentation ?? (hasTwoColumns(coarseClean, dpi / factor) ? 'columns' : 'one-column');
   return {
     picture: encoded(clean),
     clean,
@@ -118,6 +164,7 @@ function forEngine({ scale, dpi, ...flat }: Sized, wish: RecipeWish): EnginePart
     rulesRemoved,
     flattened: wish.flattened ?? true,
     coarse: shrink(flat, factor),
+    coarseClean,
     coarseScale: factor / scale,
   };
 }

@@ -7,16 +7,16 @@ import { wholeFigures } from '#shared/reading/figure-zones.ts';
 import { lookedAt } from '#shared/reading/glyphs/look.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
-import { shrink } from '#shared/reading/picture/grey.ts';
 import { unreadMargins } from '#shared/reading/picture/margins.ts';
 import { gutterOf } from '#shared/reading/picture/spread.ts';
 import { type Reading, type ReadingWord, type RecipeWish, meanConfidence } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
 import { chooseWords, textLayer } from '#shared/reading/text-layer.ts';
-import type { ReadingWarning } from '#shared/reading/warnings.ts';
+import type { ReadingWarning } from '#shared/reading/page-warning.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
+import { isNearlyBlank, surelyRead, warningsOf, withTurnUnsure } from '#shared/reading/warnings.ts';
 import { engineName, recognise } from './engine.ts';
-import { type Prepared, analysisDpi, prepare } from './prepare.ts';
+import { type Prepared, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
 import { readMargins, rereadCells, rereadFigures } from './reread.ts';
 
@@ -43,17 +43,22 @@ export async function readPage(input: ReadInput): Promise<Reading> {
   const { drawn, dpi, wish } = input;
   const reading = await readAsItLies(input);
   if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove) return reading;
-  const turnDegrees = await uprightTurn(drawn, dpi);
-  return turnDegrees === 0 ? reading : readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
+  const { turn: turnDegrees, isSure } = await uprightTurn(drawn, dpi);
+  if (turnDegrees !== 0) return readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
+  return isSure ? reading : { ...reading, warnings: withTurnUnsure(reading) };
 }
 
 async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, transform } = prepared;
-  const read = await recognisedWords(prepared);
-  const { words: mended, figures } = await secondLooks(prepared, read);
+  const looked = await secondLooks(prepared, await recognisedWords(prepared));
+  const { quality } = prepared;
+  const { figures } = looked;
+  const isBlank = figures.length === 0 && isNearlyBlank(quality, looked.words);
   const filed = layer === null ? null : textLayer.parse(JSON.parse(await readFile(layer, 'utf8')));
-  const { words, wordsFrom, warnings } = chooseWords(mended, filed, { transform, wish: wish.wordsFrom });
+  const read = isBlank ? surelyRead(looked.words) : looked.words;
+  const { words, wordsFrom, warnings } = chooseWords(read, filed, { transform, wish: wish.wordsFrom });
+  const confidence = meanConfidence(words);
   return {
     recipe: {
       engine: engineName,
@@ -66,13 +71,13 @@ async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInpu
       turnDegrees: wish.turnDegrees ?? 0,
       ...(filed === null ? {} : { wordsFrom }),
     },
-    confidence: meanConfidence(words),
+    confidence,
     width: shown.width,
     height: shown.height,
     transform,
     words,
     figures,
-    warnings: [...warnings, ...spreadWarning(prepared)],
+    warnings: [...warningsOf({ dpi, quality, words, confidence }), ...warnings, ...spreadWarning(prepared)],
   };
 }
 
@@ -80,7 +85,7 @@ function spreadWarning({ coarse, coarseScale, shown }: Prepared): ReadingWarning
   const at = gutterOf(coarse, shown.dpi / coarseScale);
   return at === null
     ? []
-    : [{ kind: 'double-page', says: `Two pages seem to meet at ${Math.round(at * 100)} % of the width.` }];
+    : [{ kind: 'double-page', detail: `they seem to meet at ${Math.round(at * 100)} % of the width` }];
 }
 
 const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dpi * scale);
@@ -107,11 +112,9 @@ async function secondLooks(
   return { words: mendBullets(inReadingOrder(mendTables(repairWords(labelled)), figures)), figures };
 }
 
-function unreadIn({ clean, scale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
-  const factor = Math.max(1, Math.round((shown.dpi * scale) / analysisDpi));
-  const toShown = factor / scale;
-  const boxes = words.map(({ box }) => scaled(box, 1 / toShown));
-  return unreadMargins(shrink(clean, factor), shown.dpi / toShown, boxes).map((zone) => scaled(zone, toShown));
+function unreadIn({ coarseClean, coarseScale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
+  const boxes = words.map(({ box }) => scaled(box, 1 / coarseScale));
+  return unreadMargins(coarseClean, shown.dpi / coarseScale, boxes).map((zone) => scaled(zone, coarseScale));
 }
 
 const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;

@@ -14,14 +14,16 @@ const surelyWord = 75;
 const clearlyMore = 1.6;
 const fewestLetters = 40;
 
-/** The clockwise turn that sets a page upright: the one under which the middle of it reads best. */
-export async function uprightTurn(drawn: string, dpi: number): Promise<Turn> {
+/** The clockwise turn that sets a page upright: the one under which the middle of it reads best; as it lies when unsure. */
+export async function uprightTurn(drawn: string, dpi: number): Promise<{ turn: Turn; isSure: boolean }> {
   const crop = await middleOf(drawn);
   const letters = new Map<Turn, number>();
   for (const turn of turns) letters.set(turn, await lettersIn(turned(crop, turn), dpi));
   const [best = [0, 0] as const] = [...letters].sort(([, a], [, b]) => b - a);
-  const isClear = best[1] >= fewestLetters && best[1] > (letters.get(0) ?? 0) * clearlyMore;
-  return isClear ? best[0] : 0;
+  const [turn, most] = best;
+  const next = Math.max(...[...letters].map(([each, count]) => (each === turn ? 0 : count)));
+  const isSure = most >= fewestLetters && most > next * clearlyMore;
+  return { turn: isSure ? turn : 0, isSure };
 }
 
 async function middleOf(drawn: string): Promise<GreyPicture> {

@@ -1,6 +1,6 @@
-import { and, asc, eq } from 'drizzle-orm';
+import { and, asc, eq, like } from 'drizzle-orm';
 import type { Quantity, Setting } from '#shared/api/quantities.ts';
-import { quantities, settings } from '#server/db/schema/index.ts';
+import { pages, quantities, revisions, settings } from '#server/db/schema/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 
 export type QuantityRow = typeof quantities.$inferSelect;
@@ -48,3 +48,13 @@ export const findSetting = (db: Connection, manualId: string, id: string) =>
     .from(settings)
     .where(and(eq(settings.manualId, manualId), eq(settings.id, id)))
     .get();
+
+/** The current documents of the pages that have live values on them, in order. */
+export const pagesWithLiveValues = (db: Connection, manualId: string) =>
+  db
+    .select({ pageId: pages.id, pageLabel: pages.label, document: revisions.document })
+    .from(pages)
+    .innerJoin(revisions, and(eq(revisions.pageId, pages.id), eq(revisions.number, pages.revision)))
+    .where(and(eq(pages.manualId, manualId), like(revisions.document, '%"liveValue"%')))
+    .orderBy(asc(pages.position))
+    .all();

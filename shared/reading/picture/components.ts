@@ -5,10 +5,9 @@ type Ink = { width: number; height: number; ink: Uint8Array };
 
 /** The connected pieces of ink (touching at a side or a corner), each given once to `take`, with its pixels. */
 export function eachComponent(picture: Ink, take: (found: Component, pixels: Int32Array) => void): void {
-  const left = Uint8Array.from(picture.ink);
+  const left = picture.ink.slice();
   const list: PixelList = { pixels: new Int32Array(4096), count: 0 };
-  for (let first = 0; first < left.length; first += 1) {
-    if (left[first] !== 1) continue;
+  for (let first = left.indexOf(1); first >= 0; first = left.indexOf(1, first + 1)) {
     list.count = 0;
     push(list, first, left);
     take(gather(picture, left, list), list.pixels.subarray(0, list.count));

@@ -14,17 +14,24 @@ export function flatten({ width, height, data }: GreyPicture): GreyPicture {
   const across = Math.ceil(width / tile);
   const down = Math.ceil(height / tile);
   const levels = new Float64Array(across * down);
+  const counts = new Uint32Array(256);
   for (let ty = 0; ty < down; ty += 1) {
-    for (let tx = 0; tx < across; tx += 1) levels[ty * across + tx] = paperLevel({ width, height, data }, tx, ty);
+    for (let tx = 0; tx < across; tx += 1)
+      levels[ty * across + tx] = paperLevel({ width, height, data }, { tx, ty }, counts);
   }
-  const paper = lightestAround(levels, across, down);
+  const gains = lightestAround(levels, across, down).map((level) => paperAfterwards / level);
   const flat = new Uint8Array(width * height);
-  for (let y = 0; y < height; y += 1) fillRow({ width, data, flat }, y, rowLevels(paper, { across, down }, y));
+  for (let y = 0; y < height; y += 1) fillRow({ width, data, flat }, y, rowGains(gains, { across, down }, y));
   return { width, height, data: flat };
 }
 
-function paperLevel({ width, height, data }: GreyPicture, tx: number, ty: number): number {
-  const counts = new Uint32Array(256);
+/** `counts` is room to count in, used again for every tile. */
+function paperLevel(
+  { width, height, data }: GreyPicture,
+  { tx, ty }: { tx: number; ty: number },
+  counts: Uint32Array,
+): number {
+  counts.fill(0);
   let seen = 0;
   for (let y = ty * tile; y < Math.min(height, (ty + 1) * tile); y += 2) {
     for (let x = tx * tile; x < Math.min(width, (tx + 1) * tile); x += 2) {
@@ -55,30 +62,35 @@ function lightestAround(levels: Float64Array, across: number, down: number): Flo
   });
 }
 
-/** The paper's level along one row of tiles' centres, between the rows of tiles above and below. */
-function rowLevels(paper: Float64Array, { across, down }: { across: number; down: number }, y: number): Float64Array {
+/** What pixels are multiplied by along one row, at the tiles' centres: between the rows of tiles above and below. */
+function rowGains(gains: Float64Array, { across, down }: { across: number; down: number }, y: number): Float64Array {
   const at = Math.min(down - 1, Math.max(0, y / tile - 0.5));
   const above = Math.floor(at);
   const below = Math.min(down - 1, above + 1);
   const share = at - above;
   const row = new Float64Array(across);
   for (let tx = 0; tx < across; tx += 1) {
-    row[tx] = (paper[above * across + tx] ?? 255) * (1 - share) + (paper[below * across + tx] ?? 255) * share;
+    row[tx] = (gains[above * across + tx] ?? 1) * (1 - share) + (gains[below * across + tx] ?? 1) * share;
   }
   return row;
 }
 
+/** From the centre of one tile to that of the next the gain changes evenly, so the inner loop only adds and multiplies. */
 function fillRow(
   { width, data, flat }: { width: number; data: Uint8Array; flat: Uint8Array },
   y: number,
-  levels: Float64Array,
+  gains: Float64Array,
 ): void {
-  const last = levels.length - 1;
-  for (let x = 0; x < width; x += 1) {
-    const at = Math.min(last, Math.max(0, x / tile - 0.5));
-    const left = Math.floor(at);
-    const share = at - left;
-    const level = (levels[left] ?? 255) * (1 - share) + (levels[Math.min(last, left + 1)] ?? 255) * share;
-    flat[y * width + x] = Math.min(255, ((data[y * width + x] ?? 255) * paperAfterwards) / level);
+  const row = y * width;
+  for (let tx = -1; tx < gains.length; tx += 1) {
+    const from = gains[Math.max(0, tx)] ?? 1;
+    const step = ((gains[Math.min(gains.length - 1, tx + 1)] ?? 1) - from) / tile;
+    const start = tx * tile + tile / 2;
+    const end = row + Math.min(width, start + tile);
+    let at = row + Math.max(0, start);
+    for (let gain = from + (at - row - start) * step; at < end; at += 1, gain += step) {
+      const level = (data[at] ?? 255) * gain;
+      flat[at] = level > 255 ? 255 : level;
+    }
   }
 }

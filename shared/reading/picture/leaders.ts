@@ -20,7 +20,7 @@ export function removeLeaders(picture: GreyPicture, dpi: number): { picture: Gre
     if (most <= largestDotInches * dpi && least >= smallestDotInches * dpi) dots.push(found);
   });
   const leaders = evenRows(dots, dpi);
-  const data = Uint8Array.from(picture.data);
+  const data = picture.data.slice();
   for (const dot of leaders) paintOut(data, picture, dot);
   return { picture: { ...picture, data }, dots: leaders.length };
 }

@@ -20,7 +20,7 @@ export function removePatches(picture: GreyPicture, dpi: number): GreyPicture {
   small.data.forEach((level, at) => {
     if (level < darkBelow) ink[at] = 1;
   });
-  const data = Uint8Array.from(picture.data);
+  const data = picture.data.slice();
   eachComponent({ ...small, ink }, (found, pixels) => {
     if (isHole(found, smallDpi) || isBesideSheet(found, small, smallDpi))
       wipe(data, picture, { pixels, small, factor });

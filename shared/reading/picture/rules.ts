@@ -23,7 +23,7 @@ const shortThinShare = 0.9;
  */
 export function removeRules(picture: GreyPicture, dpi: number): { picture: GreyPicture; rules: Rule[] } {
   const inkBelow = inkThreshold(picture);
-  const cleaned = Uint8Array.from(picture.data);
+  const cleaned = picture.data.slice();
   const rules: Rule[] = [];
   for (const { lighter, gapInches, thinShare } of passes) {
     const threshold = Math.min(225, inkBelow + lighter);
@@ -60,25 +60,56 @@ function removedAlong(picture: GreyPicture, cleaned: Uint8Array, scan: Scan): Ru
 type Run = { start: number; length: number };
 type Lane = { isAcross: boolean; lane: number; threshold: number };
 
-/** Runs of ink along a row or column that are at least so long, with small gaps allowed. */
-function longRuns({ width, height, data }: GreyPicture, lane: Lane & { shortest: number; gap: number }): Run[] {
-  const end = lane.isAcross ? width : height;
-  const stride = lane.isAcross ? 1 : width;
-  const base = lane.isAcross ? lane.lane * width : lane.lane;
-  const runs: Run[] = [];
-  let [start, last] = [-1, -1];
-  const close = (): void => {
-    if (start >= 0 && last - start + 1 >= lane.shortest) runs.push({ start, length: last - start + 1 });
-    start = -1;
+/**
+ * Runs of ink along a row or column that are at least so long, with small gaps allowed. Only places that any such run
+ * must cover are looked at, and the run is followed both ways from there: a page is mostly paper and short strokes.
+ */
+function longRuns(
+  { width, height, data }: GreyPicture,
+  { isAcross, lane, threshold, shortest, gap }: Lane & { shortest: number; gap: number },
+): Run[] {
+  const track: Track = {
+    data,
+    end: isAcross ? width : height,
+    stride: isAcross ? 1 : width,
+    base: isAcross ? lane * width : lane,
+    threshold,
+    gap,
   };
-  for (let at = 0; at < end; at += 1) {
-    if ((data[base + at * stride] ?? 255) <= lane.threshold) {
-      if (start < 0) start = at;
-      last = at;
-    } else if (start >= 0 && at - last > lane.gap) close();
+  const runs: Run[] = [];
+  const step = Math.max(1, shortest - gap - 1);
+  for (let probe = 0; probe < track.end; probe += step) {
+    const first = inkFrom(track, probe);
+    if (first < 0) continue;
+    const start = followed(track, first, -1);
+    const last = followed(track, first, 1);
+    if (last - start + 1 >= shortest) runs.push({ start, length: last - start + 1 });
+    while (probe + step <= last) probe += step;
   }
-  close();
   return runs;
+}
+
+/** One row or column of a picture. */
+type Track = { data: Uint8Array; end: number; stride: number; base: number; threshold: number; gap: number };
+
+/** The first ink from here on, no farther than a gap; -1 where there is none. */
+function inkFrom({ data, end, stride, base, threshold, gap }: Track, probe: number): number {
+  const last = Math.min(end - 1, probe + gap);
+  for (let at = probe; at <= last; at += 1) if ((data[base + at * stride] ?? 255) <= threshold) return at;
+  return -1;
+}
+
+/** The last ink this way, over gaps that are small enough. */
+function followed({ data, end, stride, base, threshold, gap }: Track, from: number, by: 1 | -1): number {
+  let last = from;
+  let paper = 0;
+  for (let at = from + by; at >= 0 && at < end && paper <= gap; at += by) {
+    if ((data[base + at * stride] ?? 255) <= threshold) {
+      last = at;
+      paper = 0;
+    } else paper += 1;
+  }
+  return last;
 }
 
 /** The share of a run with paper on both sides: most of a rule, little of a dark patch or a drawing's shading. */

@@ -18,6 +18,9 @@ export function ManualDeeds({ manual, addScans }: { manual: Manual; addScans: Re
       <Button look="quiet" asChild>
         <Link to={`/search?manualId=${manual.id}`}>Search in this manual</Link>
       </Button>
+      <Button look="quiet" asChild>
+        <Link to={`/manuals/${manual.id}/calculations`}>Calculations</Link>
+      </Button>
       {mayChange ? (
         <>
           <Button look="quiet" onClick={() => setOpen('edit')}>

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { PageSummary } from '#shared/api/pages.ts';
-import { warningAdvice, warningWords } from '#shared/reading/warnings.ts';
+import { warningKinds } from '#shared/reading/page-warning.ts';
 import { imageOf, readPageAgain } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
 import { counted } from '#shared/kit/counted.ts';
@@ -60,10 +60,10 @@ export function PageTile({ manualId, page, isLabelling }: Props) {
           {word}
         </StateWord>
         {doubtCount === 0 ? null : <span className="doubtful">{counted(doubtCount, 'doubt')}</span>}
-        {warnings.map(({ kind, says }) => (
-          <span key={kind} title={`${says} ${warningAdvice[kind]}`}>
+        {warnings.map(({ kind }) => (
+          <span key={kind} title={warningKinds[kind].says}>
             <StateWord tone="doubt" shape="question">
-              {warningWords[kind]}
+              {warningKinds[kind].brief}
             </StateWord>
           </span>
         ))}

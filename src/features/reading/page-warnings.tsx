@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Page } from '#shared/api/pages.ts';
-import { type ReadingWarning, warningAdvice, warningWords } from '#shared/reading/warnings.ts';
+import { type ReadingWarning, warningKinds } from '#shared/reading/page-warning.ts';
 import { dividePage, joinPage } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
 import { saidBy } from '#src/lib/said-by.ts';
@@ -17,10 +17,10 @@ export function PageWarnings({ page }: { page: Page }) {
         <Notice
           key={warning.kind}
           kind="doubt"
-          title={`${capital(warningWords[warning.kind])}. ${warning.says}`}
+          title={warningKinds[warning.kind].says}
           action={mayRead && warning.kind === 'double-page' ? <Divide page={page} warning={warning} /> : null}
         >
-          {warningAdvice[warning.kind]}
+          {`${capital(warning.detail)}.`}
         </Notice>
       ))}
       {page.half === 'whole' ? null : <HalfNotice page={page} mayRead={mayRead} />}
@@ -32,7 +32,7 @@ const capital = (words: string): string => words.charAt(0).toUpperCase() + words
 const hasBeenWorkedOn = ({ state }: Page): boolean => state === 'corrected' || state === 'proofed';
 
 /** The warning says where the pages meet, in percent of the width. */
-const cutIn = ({ says }: ReadingWarning): number => Number(/(\d+) %/.exec(says)?.[1] ?? 50) / 100;
+const cutIn = ({ detail }: ReadingWarning): number => Number(/(\d+) %/.exec(detail)?.[1] ?? 50) / 100;
 
 function Divide({ page, warning }: { page: Page; warning: ReadingWarning }) {
   const { mutate, isPending } = useMutation(dividePage(useQueryClient(), page.manualId));

@@ -1,0 +1,27 @@
+import { mutationOptions, queryOptions } from '@tanstack/react-query';
+import * as api from '#shared/api/calculations.ts';
+import { addressOf, call } from './call.ts';
+import type { Inputs } from './quantities.ts';
+import { quantityKeys } from './quantity-keys.ts';
+
+type Between = { before: Inputs; after: Inputs };
+
+export const changeSheetOf = (manualId: string, between: Between) =>
+  queryOptions({
+    queryKey: [...quantityKeys.ofManual(manualId), 'change-sheet', between],
+    queryFn: ({ signal }) => call(api.getChangeSheet, { params: { manualId }, body: between, signal }),
+  });
+
+/** The same as a file. It is asked for with the settings in the request's body, so a plain link does not do. */
+export const changeSheetFile = (manualId: string) =>
+  mutationOptions({
+    mutationFn: async (between: Between): Promise<Blob> => {
+      const response = await fetch(addressOf(api.getChangeSheet, { params: { manualId }, query: { format: 'csv' } }), {
+        method: 'POST',
+        headers: { 'Content-Type': 'application/json' },
+        body: JSON.stringify(between),
+      });
+      if (!response.ok) throw new Error('The change sheet could not be written to a file. Try again.');
+      return response.blob();
+    },
+  });
