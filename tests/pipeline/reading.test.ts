@@ -73,12 +73,8 @@ describe('a printed page, leaning and specked', () => {
       ...[1.75, ...rows.map((_, row) => 2.1 + row * 0.3), 3.65].map((y): Mark => ({ rule: [1, y, 7.2, y] })),
     ];
     const [table] = tablesOf(await readBack(marks, { face: 'typewriter', leanDegrees: -0.7 }));
-    expect(
-      table?.rows
-        .slice(1)
-        .flat()
-        .filter((cell, at) => cell === rows.flat()[at]).length,
-    ).toBeGreaterThanOrEqual(18);
+    const read = new Set((table?.rows ?? []).map((row) => row.join(' | ')));
+    expect(rows.filter((row) => read.has(row.join(' | '))).length).toBeGreaterThanOrEqual(4);
   });
 
   it('gives two columns back one after the other, though it leans and a title runs across both', async () => {

@@ -1,4 +1,5 @@
 import type { Zone } from '#shared/document/define-block.ts';
+import { glyphIn } from './classify.ts';
 import { fractionIn } from './fraction-parts.ts';
 import { inkBox } from './patch.ts';
 import type { Look, ReadSymbol } from './spelled.ts';
@@ -6,6 +7,9 @@ import type { Look, ReadSymbol } from './spelled.ts';
 /** A fraction set as one sign, as wide as this in heights of a capital, comes out as one to three figures or odd letters. */
 const narrowest = 0.72;
 const widest = 2.6;
+const widerThanFigure = 0.9;
+const surelyFraction = 0.9;
+export const fractionSigns = '½¼¾⅛⅜⅝⅞⅓⅔';
 const bentFraction = /^[0-9VYZvyAIlTxz%$¥/\\|"“”'’)?&]{1,3}$/;
 const bentWord = /^[("']?[0-9VYZvyAIlTxz%$¥/\\|"“”'’)?&]{1,5}[).,;:"”-]*$/;
 
@@ -17,11 +21,20 @@ export function fractionsIn(symbols: readonly ReadSymbol[], look: Look): string 
   const parts = piecesOf(symbols, look).map(({ zone, text: read }) => {
     const width = zone[2] / look.measure.capital;
     if (width < narrowest || width > widest || !bentFraction.test(read)) return read;
-    const found = fractionIn(look.picture, zone, { read, isTall: isTall(zone, look) });
+    const found =
+      fractionIn(look.picture, zone, { read, isTall: isTall(zone, look) }) ??
+      (symbols.length === 1 ? wholeSign(zone, read, look) : null);
     isAnySeen ||= found !== null;
     return found ?? read;
   });
   return isAnySeen ? parts.join('') : null;
+}
+
+/** A lone figure or % as wide as two is a fraction whose parts touch, where it looks like one as a whole. */
+function wholeSign(zone: Zone, read: string, { picture, measure }: Look): string | null {
+  if (!/^[\d%]$/.test(read) || zone[2] < measure.capital * widerThanFigure) return null;
+  const seen = glyphIn(picture, zone, measure);
+  return seen !== null && seen.likelihood >= surelyFraction && fractionSigns.includes(seen.glyph) ? seen.glyph : null;
 }
 
 /** Higher than a capital: the stroke of a fraction often is, and touching figures are not. */
@@ -34,7 +47,9 @@ type Piece = { zone: Zone; text: string };
 
 /** The pieces of ink of a word that stand apart, each with what the engine read there. */
 function piecesOf(symbols: readonly ReadSymbol[], look: Look): Piece[] {
-  const pieces = inkRuns(symbols, look);
+  const runs = inkRuns(symbols, look);
+  // A thin stroke may leave a gap on either side: what was read as one letter is looked at as one.
+  const pieces = symbols.length === 1 ? joined(runs) : runs;
   for (const { text, box } of symbols) {
     const middle = box[0] + box[2] / 2;
     const distance = ({ zone: [x, , w] }: Piece): number => Math.max(0, x - middle, middle - x - w);
@@ -42,6 +57,13 @@ function piecesOf(symbols: readonly ReadSymbol[], look: Look): Piece[] {
     if (nearest !== undefined) nearest.text += text;
   }
   return pieces.filter(({ text }) => text !== '');
+}
+
+function joined(runs: readonly Piece[]): Piece[] {
+  const [first, last] = [runs[0], runs.at(-1)];
+  if (first === undefined || last === undefined) return [];
+  const [x, y, , h] = first.zone;
+  return [{ zone: [x, y, last.zone[0] + last.zone[2] - x, h], text: '' }];
 }
 
 function inkRuns(symbols: readonly ReadSymbol[], { picture, measure: { baseline, capital } }: Look): Piece[] {

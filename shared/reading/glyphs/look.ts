@@ -2,13 +2,14 @@ import type { GreyPicture } from '#shared/reading/picture/grey.ts';
 import type { ReadingWord } from '#shared/reading/reading.ts';
 import { type Seen, glyphIn } from './classify.ts';
 import { fractionsIn } from './fractions.ts';
+import { passedOver } from './gaps.ts';
 import { type Look, type ReadSymbol, type SpelledWord, lineMeasure, zoneOf } from './spelled.ts';
 
 /** At least this likely, or it is no reading. */
 export const sureAbove = 0.9;
 
 /** What may stand for a sign, and where: `before` and `behind` are what stands next to it, in the word or beside it. */
-type Suspect = { signs: string; read: RegExp; before: RegExp; behind: RegExp };
+type Suspect = { signs: string; read: RegExp; before: RegExp; behind: RegExp; least?: number };
 const suspects: readonly Suspect[] = [
   { signs: '±', read: /^[+*£#$%&€§]$/, before: /^[("']?$|[\s(]$/, behind: /^\s?[\d.]/ },
   { signs: '±', read: /^[245tf]$/, before: /^[("']?$|[\s(]$/, behind: /^[\d.]+\s?(%|per)/ },
@@ -19,6 +20,8 @@ const suspects: readonly Suspect[] = [
     behind: /^[punyw]?(?:[fFhHvVaAwW]|sec)?[).,;:]*$/,
   },
   { signs: 'Ω', read: /^[QO0on9aG2]$/, before: /\d\s$|\d$|\d\s?[kKM]$/, behind: /^[).,;:Q2]*$/ },
+  // No manual prints these behind a figure, so that less is asked of the picture.
+  { signs: 'Ω', read: /^[®©@]$/, before: /\d\s?$/, behind: /^[).,;:]*$/, least: 0.3 },
   { signs: '×', read: /^[xXK*«»]$/, before: /\d\s?$/, behind: /^\s?\d/ },
   { signs: '°', read: /^[o0O°'"*®]$/, before: /\d$/, behind: /^\s?[CFc]?[).,;:]*$/ },
 ];
@@ -32,15 +35,30 @@ export function lookedAt(words: readonly SpelledWord[], picture: GreyPicture): R
   const byLine = new Map<number, ReadSymbol[]>();
   for (const { line, symbols } of words) byLine.set(line, [...(byLine.get(line) ?? []), ...symbols]);
   const measures = new Map([...byLine].map(([line, symbols]) => [line, lineMeasure(symbols)]));
-  return words.map((word, at) => {
+  const looks = (line: number): Look | null => {
+    const measure = measures.get(line) ?? null;
+    return measure === null ? null : { picture, measure };
+  };
+  return withPassedOver(words, looks).map((word, at, all) => {
     const { symbols, ...plain } = word;
-    const measure = measures.get(word.line);
-    if (measure === null || measure === undefined || symbols.length === 0) return plain;
-    const near = { before: besides(words[at - 1], word), next: besides(words[at + 1], word) };
-    const look = { picture, measure };
+    const look = looks(word.line);
+    if (look === null || symbols.length === 0) return plain;
+    const near = { before: besides(all[at - 1], word), next: besides(all[at + 1], word) };
     const seen = fractionsIn(symbols, look) ?? signsIn(symbols, near, look);
     return seen === null ? plain : { ...plain, seen };
   });
+}
+
+/** The words with those between them that the engine passed over. */
+function withPassedOver(words: readonly SpelledWord[], looks: (line: number) => Look | null): SpelledWord[] {
+  return words.reduce<SpelledWord[]>((all, word) => {
+    const before = all.at(-1);
+    const look = looks(word.line);
+    if (before === undefined || look === null || before.line !== word.line) return [...all, word];
+    const passed = passedOver(before, word, look);
+    if (passed === null) return [...all, word];
+    return passed.takesNext ? [...all, passed.word] : [...all, passed.word, word];
+  }, []);
 }
 
 type Near = { before: string; next: string };
@@ -62,7 +80,8 @@ function signsIn(symbols: readonly ReadSymbol[], near: Near, look: Look): string
     );
     if (suspect === undefined) return symbol.text;
     const found = glyphIn(look.picture, zoneOf(symbols, index, look), look.measure);
-    if (found === null || found.likelihood < sureAbove || !isOneOf(found, suspect, symbol)) return symbol.text;
+    if (found === null || found.likelihood < (suspect.least ?? sureAbove) || !isOneOf(found, suspect, symbol))
+      return symbol.text;
     isAnySeen = true;
     return suspect.signs.includes(found.glyph) ? found.glyph : symbol.text;
   });
