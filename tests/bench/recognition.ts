@@ -13,6 +13,7 @@ import { textOf } from '#shared/document/text-of.ts';
 import type { Reading, Transform } from '#shared/reading/reading.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
+import { trustIn } from '#shared/reading/trust.ts';
 import { type Judged, type TrueWord, confidenceLines, judged } from './confidence.ts';
 
 /**
@@ -156,17 +157,17 @@ export function hypothesisOf(reading: Reading): Hypothesis {
   const document = documentOf(reading);
   return {
     text: textOf(document),
-    words: withoutSpecks(reading.words).map(({ text, confidence, box, line }) => ({
-      text,
-      conf: confidence,
-      box: delivered(box, reading.transform),
-      line,
+    words: withoutSpecks(reading.words).map((word) => ({
+      text: word.text,
+      conf: trustIn(word),
+      box: delivered(word.box, reading.transform),
+      line: word.line,
     })),
     tables: tablesOf(document).map(({ rows }) => ({ rows })),
   };
 }
 
-function delivered([x, y, w, h]: Zone, [[a, b, c], [d, e, f]]: Transform): number[] {
+export function delivered([x, y, w, h]: Zone, [[a, b, c], [d, e, f]]: Transform): number[] {
   const corners = [
     [x, y],
     [x + w, y],
