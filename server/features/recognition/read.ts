@@ -27,11 +27,13 @@ const uprightAbove = 65;
 export async function readPage(input: ReadInput): Promise<Reading> {
   const { drawn, dpi, wish } = input;
   const reading = await readAsItLies(input);
-  if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove) return reading;
+  if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove || isBlank(reading)) return reading;
   const { turn: turnDegrees, isSure } = await uprightTurn(drawn, dpi);
   if (turnDegrees !== 0) return readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
   return isSure ? reading : { ...reading, warnings: withTurnUnsure(reading) };
 }
+
+const isBlank = ({ warnings = [] }: Reading): boolean => warnings.some(({ kind }) => kind === 'nearly-blank');
 
 async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
@@ -40,8 +42,8 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
   const looked = await secondLooks(prepared, read);
   const { quality } = prepared;
   const { figures } = looked;
-  const isBlank = figures.length === 0 && isNearlyBlank(quality, looked.words);
-  const words = isBlank ? surelyRead(looked.words) : looked.words;
+  const hasNothing = figures.length === 0 && isNearlyBlank(quality, looked.words);
+  const words = hasNothing ? surelyRead(looked.words) : looked.words;
   const confidence = meanConfidence(words);
   return {
     recipe: {
