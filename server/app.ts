@@ -9,6 +9,7 @@ import { AppError } from '#shared/kit/app-error.ts';
 import { type Auth, accountRoutes, hasDemoPeople, sessionFinder } from '#server/features/accounts/index.ts';
 import { type AddPages, manualRoutes } from '#server/features/manuals/index.ts';
 import { pageRoutes } from '#server/features/pages/index.ts';
+import { recognitionRoutes } from '#server/features/recognition/index.ts';
 import { revisionRoutes } from '#server/features/revisions/index.ts';
 import { searchRoutes } from '#server/features/search/index.ts';
 import { valueRoutes } from '#server/features/values/index.ts';
@@ -17,12 +18,12 @@ import { liveRoute } from '#server/http/live-route.ts';
 import { openApiDocument } from '#server/http/openapi.ts';
 import { type ApiRouter, serve } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
-import type { Inspector } from '#server/jobs/inspector.ts';
+import type { SideWorker } from '#server/jobs/side-worker.ts';
 import { queueCounts } from '#server/jobs/queue.ts';
 
 export type AppTools = Tools & {
   auth: Auth;
-  inspector: Inspector;
+  sideWorker: SideWorker;
   addPages: AddPages;
   trustedOrigins: string[];
   clientDir: string;
@@ -62,6 +63,7 @@ function apiRoutes(tools: AppTools): ApiRouter {
   accountRoutes(api, tools);
   manualRoutes(api, tools);
   pageRoutes(api, tools);
+  recognitionRoutes(api, tools);
   revisionRoutes(api, tools);
   valueRoutes(api, tools);
   searchRoutes(api, tools);

@@ -6,4 +6,6 @@ export const pipeline: Pipeline = {
   'page.drawn': 'read-page',
   'words.read': 'structure-page',
   'revision.saved': 'index-page',
+  'page.corrected': 'learn-page',
+  'lessons.changed': 'teach-manual',
 };

@@ -9,10 +9,10 @@ import { openDatabase, projectRoot } from '#server/db/database.ts';
 import { createAuth, createMailer } from '#server/features/accounts/index.ts';
 import { addPagesBy, drawStep } from '#server/features/pages/index.ts';
 import { readStep } from '#server/features/recognition/index.ts';
-import { structureStep } from '#server/features/revisions/index.ts';
+import { learnStep, structureStep, teachStep } from '#server/features/revisions/index.ts';
 import { indexStep } from '#server/features/search/index.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { createInspector } from '#server/jobs/inspector.ts';
+import { createSideWorker } from '#server/jobs/side-worker.ts';
 import { createLiveEvents } from '#server/jobs/live-events.ts';
 import { announceBy } from '#server/jobs/queue.ts';
 import { type Steps, createRunner } from '#server/jobs/runner.ts';
@@ -27,9 +27,9 @@ export type Running = { url: string; tools: AppTools; stop: () => Promise<void> 
 export type WorkerScript = { script: string; execArgv: string[] };
 
 const slowestStopMs = 8000;
-/** The examiner of new files needs little; a file that makes it need more is not a scan. */
-const inspectorMemoryBytes = 500 * 1024 * 1024;
-const inspectorTimeoutMs = 30_000;
+/** Examining a file or reading a zone needs little; a file that makes it need more is not a scan. */
+const sideWorkerMemoryBytes = 600 * 1024 * 1024;
+const sideWorkerTimeoutMs = 30_000;
 
 /** Opens the database, starts the queue and listens. Everything that runs hangs on what this returns. */
 export async function startServer(config: Config, worker: WorkerScript): Promise<Running> {
@@ -57,7 +57,11 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
     log,
     now,
   });
-  const inspector = createInspector({ ...worker, memoryBytes: inspectorMemoryBytes, timeoutMs: inspectorTimeoutMs });
+  const sideWorker = createSideWorker({
+    ...worker,
+    memoryBytes: sideWorkerMemoryBytes,
+    timeoutMs: sideWorkerTimeoutMs,
+  });
 
   const sendMail = createMailer(tools);
   const auth = createAuth(tools, {
@@ -67,14 +71,14 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
     sendMail,
   });
   const clientDir = path.join(projectRoot, 'dist/client');
-  const appTools: AppTools = { ...tools, auth, inspector, addPages: addPagesBy(announce), trustedOrigins, clientDir };
+  const appTools: AppTools = { ...tools, auth, sideWorker, addPages: addPagesBy(announce), trustedOrigins, clientDir };
   const { app } = createApp(appTools);
   server.removeAllListeners('request');
   server.on('request', app);
   runner.start();
 
   const stop = async (): Promise<void> => {
-    inspector.stop();
+    sideWorker.stop();
     const closed = new Promise((resolve) => server.close(resolve));
     await runner.stop();
     server.closeIdleConnections();
@@ -90,6 +94,8 @@ const stepsOf = (tools: Tools): Steps => ({
   'read-page': readStep(tools),
   'structure-page': structureStep(tools),
   'index-page': indexStep(tools),
+  'learn-page': learnStep(tools),
+  'teach-manual': teachStep(tools),
 });
 
 /** Listens, and says under which addresses its own pages are opened: the one configured, this machine's, and the development server's. */

@@ -3,6 +3,7 @@ import { type InspectInput, inspect } from '#server/features/pages/inspect.ts';
 import { type DrawInput, drawPage } from '#server/features/pages/draw.ts';
 import type { WorkerReply, WorkerRequest } from '#server/jobs/worker-pool.ts';
 import type { ReadInput } from '#server/features/recognition/read.ts';
+import type { ReadZoneInput } from '#server/features/recognition/read-zone.ts';
 
 /**
  * The worker process: examines files, draws pages and reads them, one at a time. It holds no database and may be killed
@@ -11,6 +12,8 @@ import type { ReadInput } from '#server/features/recognition/read.ts';
 const tasks: Record<string, (input: never) => Promise<unknown>> = {
   inspect: (input: InspectInput) => inspect(input),
   draw: (input: DrawInput) => drawPage(input),
+  'read-zone': async (input: ReadZoneInput) =>
+    (await import('#server/features/recognition/read-zone.ts')).readZone(input),
   read: async (input: ReadInput) => (await import('#server/features/recognition/read.ts')).readPage(input),
 };
 

@@ -3,7 +3,7 @@ import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { around } from '#shared/document/live-values.ts';
 import type { PageDocument } from '#shared/document/page-document.ts';
 import { allNodes, placedTexts } from '#shared/document/text-of.ts';
-import { isClose } from '#shared/search/look-alike.ts';
+import { isClose } from '#shared/reading/look-alike.ts';
 import { columnMeaning, tableKind } from '#shared/reading/type-columns.ts';
 import type { Block, ManualPage, PartsTableBlock, TableBlock } from './content/types.ts';
 

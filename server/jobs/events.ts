@@ -8,14 +8,17 @@ type Subject = {
   manualId: string;
   place?: number;
   priority?: number;
+  /** The step waits until then; milliseconds since 1970. */
+  notBefore?: number;
   wish?: Record<string, unknown>;
 };
 
-/** What has happened to a page. */
-export type EventName = 'page.added' | 'page.drawn' | 'words.read' | 'revision.saved';
+/** What has happened to a page; the subject of `lessons.changed` is its manual. */
+export type EventName =
+  'page.added' | 'page.drawn' | 'words.read' | 'revision.saved' | 'page.corrected' | 'lessons.changed';
 
 /** The steps of a page's trip. Heavy ones run in worker processes, light ones in the server. */
-export type StepName = 'draw-page' | 'read-page' | 'structure-page' | 'index-page';
+export type StepName = 'draw-page' | 'read-page' | 'structure-page' | 'index-page' | 'learn-page' | 'teach-manual';
 
 export type Pipeline = Record<EventName, StepName>;
 

@@ -13,8 +13,8 @@ export const watched = 100;
 /** Queues the step that follows an event. A job that waits already is left; one that failed is woken; both keep one row. */
 export const announceBy =
   (pipeline: Pipeline): Announce =>
-  (connection, name, { subjectId, manualId, place = 0, priority = 0, wish }) => {
-    const fresh = { state: 'waiting' as const, attempts: 0, notBefore: 0, problem: null, wish: wish ?? null };
+  (connection, name, { subjectId, manualId, place = 0, priority = 0, notBefore = 0, wish }) => {
+    const fresh = { state: 'waiting' as const, attempts: 0, notBefore, problem: null, wish: wish ?? null };
     connection
       .insert(jobs)
       .values({ step: pipeline[name], subjectId, manualId, place, priority, ...fresh })

@@ -4,6 +4,14 @@ import { defineEndpoint } from './endpoint.ts';
 
 const optionalText = z.string().trim().max(200).nullable();
 
+/** How the manual's own habits bear on its reading. */
+const habits = {
+  /** What people correct settles and raises doubts on the manual's other pages. */
+  learns: z.boolean(),
+  /** Units as this manual writes them, beyond those that every manual may use. */
+  ownUnits: z.array(z.string().trim().min(1).max(12)).max(40),
+};
+
 export const manual = z.object({
   id,
   title: z.string(),
@@ -14,6 +22,7 @@ export const manual = z.object({
   createdAt: time,
   createdBy: z.string(),
   deletedAt: time.nullable(),
+  ...habits,
   reading: z.enum(['running', 'paused']),
   pageCounts: z.object({
     all: z.number().int(),
@@ -72,7 +81,7 @@ export const updateManual = defineEndpoint({
   summary: 'Change what is recorded about a manual',
   action: 'add-manuals',
   params: manualParams,
-  body: manualInput.partial(),
+  body: manualInput.extend(habits).partial(),
   reply: manual,
 });
 

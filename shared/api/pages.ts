@@ -2,12 +2,16 @@ import { z } from 'zod';
 import { columnMeanings, tableKinds } from '#shared/document/blocks/table.ts';
 import { zone } from '#shared/document/define-block.ts';
 import { readingBlock, readingWord, recipe, recipeWish, transform } from '#shared/reading/reading.ts';
-import { readingWarning } from '#shared/reading/warnings.ts';
+import { readingWarning } from '#shared/reading/page-warning.ts';
 import { id, listOf, listQuery, manualParams, ok, pageParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 
 export const pageStates = ['waiting', 'reading', 'read', 'failed', 'corrected', 'proofed'] as const;
 export type PageState = (typeof pageStates)[number];
+
+/** Which half of a double-page spread a page is. */
+export const pageHalves = ['whole', 'left', 'right'] as const;
+export type PageHalf = (typeof pageHalves)[number];
 
 export const pageSummary = z.object({
   id,
@@ -18,6 +22,9 @@ export const pageSummary = z.object({
   doubtCount: z.number().int(),
   revision: z.number().int(),
   problem: z.string().nullable(),
+  half: z.enum(pageHalves),
+  /** What the last reading found wrong with the picture. */
+  warnings: z.array(readingWarning),
   /** Changes with the page image, and with nothing else; null until there is one. Goes into the image's address as `v`. */
   imageVersion: z.string().nullable(),
 });
@@ -147,4 +154,26 @@ export const lookAtPage = defineEndpoint({
   action: 'read-manuals',
   params: pageParams,
   reply: ok,
+});
+
+export const dividePage = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/division',
+  summary: 'Divide the picture of a double-page spread: the page becomes its left half, a new page behind it the right',
+  action: 'run-recognition',
+  params: pageParams,
+  body: z.object({ cutShare: z.number().min(0.2).max(0.8).default(0.5) }).optional(),
+  reply: z.object({ items: z.array(pageSummary) }),
+  status: 202,
+});
+
+export const joinPage = defineEndpoint({
+  method: 'delete',
+  path: '/api/pages/:pageId/division',
+  summary:
+    'Take a division back: the two halves of a spread become one page again, as long as nobody has worked on them',
+  action: 'run-recognition',
+  params: pageParams,
+  reply: pageSummary,
+  status: 202,
 });

@@ -5,6 +5,9 @@ import { zone } from './define-block.ts';
 export const doubtReasons = {
   'low-confidence': 'Recognition was unsure of this',
   'sign-guessed': 'The sign was worked out from the unit, not read',
+  'read-differently': 'Another reading of the scan says otherwise',
+  'corrected-elsewhere': 'The same reading was corrected on another page of this manual',
+  'odd-part-number': 'No part number on the corrected pages has this shape',
   'odd-number': 'This does not look like a number that could be printed here',
 } as const;
 

@@ -21,7 +21,7 @@ export function between(from: Matrix, to: Matrix): Matrix {
 }
 
 /** The zone's middle moves as the matrix says, its size as much as the matrix enlarges; it stays upright. */
-function movedZone([x, y, w, h]: Zone, matrix: Matrix): Zone {
+export function movedZone([x, y, w, h]: Zone, matrix: Matrix): Zone {
   const grow = Math.sqrt(Math.abs(determinant(matrix)));
   const [mx, my] = [x + w / 2, y + h / 2];
   const [[a, b, c], [d, e, f]] = matrix;

@@ -9,7 +9,8 @@ const usual = new Set(['.5', '0.5', '1', '2', '2.5', '3', '5', '10', '15', '20',
 const isUsual = (figure: string): boolean => usual.has(figure) || /^0?\.0+\d+$/.test(figure);
 const valueBefore = /(?:^|\d)(?:[kMmµupn]{0,2}[fhvΩQw]|[kK]|meg|mmf|mfd|ohms?|dcw|mc|kc)[,;]?$/;
 
-const isPercent = (word: ReadingWord | undefined): boolean => word !== undefined && /^(%|percent|per)/i.test(word.text);
+const isPercent = (word: ReadingWord | undefined): boolean =>
+  word !== undefined && /^(%|percent|per$)/i.test(word.text);
 const isOneSided = (next: ReadingWord | undefined): boolean => next !== undefined && /^[-–]\d/.test(next.text);
 
 /** Whether the page prints ± before its tolerances: most of them still show some sign. */
@@ -32,7 +33,7 @@ function percentIn(text: string): Percent | null {
 /** Puts ± back before a number with a percent sign, and as a guess before an offset in frequency. */
 export function mendSign(text: string, near: Near, habit: PageHabit): Mended | null {
   const found = percentIn(text);
-  if (found === null) return null;
+  if (found === null || isMoney(found, near)) return null;
   const { open, sign, figure, percent = '', close } = found;
   const withSign = `${open}±${figure}${percent}${close}`;
   if (percent === '' && !isPercent(near.next))
@@ -40,6 +41,10 @@ export function mendSign(text: string, near: Near, habit: PageHabit): Mended | n
   if (sign === undefined) return lostSign({ open, figure, tail: percent + close }, near, habit);
   return isOneSided(near.next) ? null : { text: withSign, sure: sign !== '+' || isUsual(figure) };
 }
+
+/** "$3 per ticket". */
+const isMoney = ({ sign, percent }: Percent, { next }: Near): boolean =>
+  sign === '$' && percent === undefined && !/^(%|percent)/i.test(next?.text ?? '');
 
 /** `+9 kc`: no frequency is printed with a plus sign, but an offset is printed with ±. */
 const isOffset = (next: ReadingWord | undefined): boolean =>

@@ -37,13 +37,16 @@ function headingOrStep({ words }: Line, text: string): LineKind {
     .map((each) => each.text)
     .join(' ');
   const isMarked = marker.test(first);
-  if (isMarked && rest !== '' && !isCapitals(rest)) {
+  if (isStep(first, rest)) {
     return { kind: 'step', marker: first, markerWords: 1, depth: first.startsWith('(') ? 1 : 0 };
   }
   const isShort = words.length <= longestHeadingWords;
   const isHeading = isShort && (numbered.test(first) ? isCapitals(rest) : isCapitals(text) && /[A-Z]{3}/.test(text));
   return isHeading ? { kind: 'heading', level: isMarked ? 3 : 2 } : { kind: 'text' };
 }
+
+const isStep = (first: string, rest: string): boolean =>
+  rest !== '' && (first === '•' || (marker.test(first) && !isCapitals(rest)));
 
 function straightened(printed: string): string {
   const word = printed.replace(/[¢©]/, 'c');

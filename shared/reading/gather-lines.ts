@@ -9,7 +9,7 @@ export type Group = { kind: LineKind; lines: Line[] };
 const surelyApart = 1.35;
 const apartAfterSentence = 1.2;
 // In letter heights.
-const indentLetters = 1.2;
+const indentLetters = 0.7;
 const outdentLetters = 0.25;
 
 /** Lines gathered into blocks; what a line is and how far it stands from the one before decide where one begins. */

@@ -11,7 +11,7 @@ export function repairWords(read: readonly ReadingWord[]): ReadingWord[] {
   const mended: ReadingWord[] = [];
   words.forEach((word, index) => {
     const near = { before: mended[index - 1], next: words[index + 1] };
-    mended.push(applied(word, mendedWord(word, near, habit)));
+    mended.push(applied(word, withPicture(word, near, habit)));
   });
   return mended;
 }
@@ -34,6 +34,20 @@ function habitOf(words: readonly ReadingWord[]): PageHabit {
     printsPeriodUnits,
     partsUnits: partsUnitsOn(words),
   };
+}
+
+/**
+ * Grammar and picture together: where both say the same there is no doubt; where the picture bears the reading out, the
+ * grammar puts no ± there; where it shows another sign, that is taken, and is a guess unless the grammar says so too.
+ */
+function withPicture(word: ReadingWord, near: Near, habit: PageHabit): Mended | null {
+  const mended = mendedWord(word, near, habit);
+  const { seen } = word;
+  if (seen === undefined) return mended;
+  if (seen === word.text) return mended !== null && mended.text.includes('±') ? null : mended;
+  if (mended?.text === seen) return { text: seen, sure: true };
+  const further = mendedWord({ ...word, text: seen }, near, habit);
+  return { text: further?.text ?? seen, sure: mended !== null && mended.text === further?.text };
 }
 
 function mendedWord(word: ReadingWord, near: Near, habit: PageHabit): Mended | null {

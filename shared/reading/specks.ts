@@ -25,7 +25,7 @@ export function withoutSpecks(words: readonly ReadingWord[]): ReadingWord[] {
 }
 
 function isSpeck({ text, confidence, box: [, , width, height] }: ReadingWord, letter: number): boolean {
-  if (bentMarker.test(text)) return false;
+  if (bentMarker.test(text) || text === '•') return false;
   if (signsOnly.test(text)) return confidence < 85 || !plainSigns.test(text);
   const isOddSize = height < letter * 0.45 || height > letter * 2.2 || (text.length > 2 && width < letter * 0.3);
   return isOddSize && confidence < 70;

@@ -5,7 +5,7 @@ import type { LineKind } from './classify-line.ts';
 import { findTables } from './find-tables.ts';
 import { gatherLines } from './gather-lines.ts';
 import { inlineOf } from './inline.ts';
-import { type Line, bottomOf, linesOf, median, middleOf } from './lines.ts';
+import { type Line, bottomOf, lineFrom, linesOf, median, middleOf } from './lines.ts';
 import { overlap } from './picture/figures.ts';
 import type { Reading } from './reading.ts';
 import { withoutSpecks } from './specks.ts';
@@ -80,18 +80,20 @@ function partRunning(lines: Line[], { width, height }: Reading): { body: Line[];
     if (line.zone[1] < height * marginShare * 1.4 && isAlone(line) && line === lines[0]) return 'head';
     return null;
   };
-  const running: Piece[] = [];
+  const running: { place: 'head' | 'foot'; line: Line }[] = [];
   const body: Line[] = [];
   for (const line of lines) {
     const place = placeOf(line);
+    const beside = running.find((other) => sameRow(other.line, line));
     if (place === null) body.push(line);
-    else
-      running.push({
-        node: { type: 'running', attrs: { zone: line.zone, place }, content: inlineOf(line.words) },
-        zone: line.zone,
-      });
+    else if (beside === undefined) running.push({ place, line });
+    else beside.line = lineFrom([...beside.line.words, ...line.words]);
   }
-  return { body, running };
+  const pieces = running.map(({ place, line: { words, zone } }): Piece => ({
+    node: { type: 'running', attrs: { zone, place }, content: inlineOf(words) },
+    zone,
+  }));
+  return { body, running: pieces };
 }
 
 const sameRow = (a: Line, b: Line): boolean => Math.abs(middleOf(a.zone) - middleOf(b.zone)) < a.zone[3] * 0.5;

@@ -1,27 +1,7 @@
-import { z } from 'zod';
 import type { PictureQuality } from './picture/quality.ts';
+import type { ReadingWarning, WarningKind } from './page-warning.ts';
 import type { Reading, ReadingWord } from './reading.ts';
 import { withoutSpecks } from './specks.ts';
-
-/** What may be amiss with a page's picture or its reading, in the archivist's words. */
-export const warningSentences = {
-  'low-resolution': 'The scan is coarse. Small figures may be wrong: scan it anew at 300 dots an inch if you can.',
-  soft: 'The scan is out of focus or blurred. Letters run into each other.',
-  faint: 'The print is faint: it stands out little from the paper.',
-  speckled: 'The scan is full of specks. Points and commas may be dirt, and dirt may be read as letters.',
-  uneven: 'The light on the page is uneven: a shadow or a stain lies over part of it.',
-  'nearly-blank': 'There is next to nothing to read on this page. What looked like dirt was left out.',
-  'turn-unsure': 'It is not sure which way up this page belongs. Check that it stands upright.',
-  'low-confidence': 'Much of this page was read with doubt. Compare all of it with the scan.',
-} as const;
-export type WarningKind = keyof typeof warningSentences;
-
-/** `detail` holds the figure behind the warning, for those who want to know. */
-export const readingWarning = z.object({
-  kind: z.enum(Object.keys(warningSentences) as [WarningKind]),
-  detail: z.string(),
-});
-export type ReadingWarning = z.infer<typeof readingWarning>;
 
 export type Evidence = {
   /** Dots an inch of the scan as delivered. */

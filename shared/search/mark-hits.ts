@@ -1,6 +1,6 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import type { PlacedText } from '#shared/document/text-of.ts';
-import { isClose } from './look-alike.ts';
+import { isClose } from '#shared/reading/look-alike.ts';
 import { type Term, tokensOf } from './query.ts';
 
 type Token = { folded: string; start: number; end: number; zone: Zone | null };

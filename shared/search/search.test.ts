@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { editDistance, foldLookAlikes, isClose } from './look-alike.ts';
+import { editDistance, foldLookAlikes, isClose } from '#shared/reading/look-alike.ts';
 import { holdsAll, markHits } from './mark-hits.ts';
 import { keyOf, quantitiesIn } from './quantities-in.ts';
 import { fold, fullTextExpression, parseQuery, tokensOf, trigramExpression } from './query.ts';

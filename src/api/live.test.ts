@@ -13,6 +13,8 @@ const page: PageSummary = {
   doubtCount: 0,
   revision: 0,
   problem: null,
+  half: 'whole',
+  warnings: [],
   imageVersion: 'drawn',
 };
 

@@ -42,7 +42,8 @@ export const addManual = (client: QueryClient) =>
 
 export const changeManual = (client: QueryClient, manualId: string) =>
   mutationOptions({
-    mutationFn: (body: Partial<ManualInput>) => call(api.updateManual, { params: { manualId }, body }),
+    mutationFn: (body: Partial<ManualInput & Pick<Manual, 'learns' | 'ownUnits'>>) =>
+      call(api.updateManual, { params: { manualId }, body }),
     onSuccess: (manual) => keep(client, manual),
   });
 

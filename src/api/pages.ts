@@ -62,3 +62,26 @@ export const readPageAgain = (client: QueryClient, manualId: string) =>
 /** Somebody looks at this page: the server reads it before others. Failing is of no matter. */
 export const lookAtPage = (pageId: string): Promise<unknown> =>
   call(api.lookAtPage, { params: { pageId } }).catch(() => undefined);
+
+export const readingOfPage = (pageId: string) =>
+  queryOptions({
+    queryKey: pageKeys.reading(pageId),
+    queryFn: ({ signal }) => call(api.getPageReading, { params: { pageId }, signal }),
+  });
+
+/** Pages come and go with a division, so the whole list is stale. */
+const staleList = (client: QueryClient, manualId: string) => () =>
+  client.invalidateQueries({ queryKey: pageKeys.ofManual(manualId) });
+
+export const dividePage = (client: QueryClient, manualId: string) =>
+  mutationOptions({
+    mutationFn: ({ pageId, cutShare }: { pageId: string; cutShare: number }) =>
+      call(api.dividePage, { params: { pageId }, body: { cutShare } }),
+    onSuccess: staleList(client, manualId),
+  });
+
+export const joinPage = (client: QueryClient, manualId: string) =>
+  mutationOptions({
+    mutationFn: (pageId: string) => call(api.joinPage, { params: { pageId } }),
+    onSuccess: staleList(client, manualId),
+  });

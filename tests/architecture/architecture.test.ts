@@ -58,6 +58,13 @@ describe('the project', () => {
   });
 
   it('takes a page through its trip without a gap', () => {
-    expect(Object.values(pipeline)).toEqual(['draw-page', 'read-page', 'structure-page', 'index-page']);
+    expect(Object.values(pipeline)).toEqual([
+      'draw-page',
+      'read-page',
+      'structure-page',
+      'index-page',
+      'learn-page',
+      'teach-manual',
+    ]);
   });
 });

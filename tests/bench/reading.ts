@@ -41,7 +41,9 @@ export async function benchReading(): Promise<string[]> {
         path: path.join(projectRoot, 'server/demo/manuals/hb-12.pdf'),
         mediaType: 'application/pdf',
         sourcePage,
+        part: null,
         target,
+        layerTarget: path.join(folder, 'layer.json'),
         mostMegapixels: 120,
       }),
     );

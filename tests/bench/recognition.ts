@@ -15,11 +15,14 @@ import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
 import { trustIn } from '#shared/reading/trust.ts';
 import { type Judged, type TrueWord, confidenceLines, judged } from './confidence.ts';
+import { readRealPaper } from './real-paper.ts';
+import { type Tally, type TrueBlock, tallyStructure, tallyText } from './structure-score.ts';
 
 /**
  * Reads generated scans whose text is known and scores what comes out: `npm run bench -- recognition [option=value ...]`.
  * Options: kinds, faces, profiles (lists with commas), seed, count, plain=no to leave the engine's default out,
  * keep=FOLDER to keep pages and results there. The default seed is for looking at figures, never for tuning.
+ * `recognition real` reads scans of real paper instead; only=PART takes those whose name holds it.
  */
 const defaults = {
   kinds: 'text,twocol,freq,parts_ruled,parts_unruled,figure',
@@ -29,6 +32,7 @@ const defaults = {
   count: '1',
   plain: 'yes',
   keep: '',
+  only: '',
 };
 type Options = typeof defaults;
 
@@ -41,6 +45,10 @@ const languageData = path.join(
 );
 
 export async function benchRecognition(args: readonly string[] = []): Promise<string[]> {
+  if (args.includes('real')) {
+    const { plain, keep, only } = optionsFrom(args);
+    return readRealPaper(path.join(scansFolder, 'real'), plainEngine, { plain: plain !== 'no', keep, only });
+  }
   if (!existsSync(generator)) return ['left out: no generator of scans here (set SCANBENCH to its folder)'];
   if (!runs(['--version'])) return ['left out: python3 is not installed (set PYTHON to it)'];
   if (!runs(['-c', 'import cv2, numpy, PIL']))
@@ -66,7 +74,7 @@ function optionsFrom(args: readonly string[]): Options {
   return { ...defaults, ...Object.fromEntries(given.map(([name, ...rest]) => [name, rest.join('=')])) };
 }
 
-type Truth = { id: string; image: string; profile: string; dpi: number; words: TrueWord[] };
+type Truth = { id: string; image: string; profile: string; dpi: number; words: TrueWord[]; blocks: TrueBlock[] };
 type Hypothesis = {
   text: string;
   words: { text: string; conf: number; box: number[]; line: number }[];
@@ -85,6 +93,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   const asked = Object.entries(wanted).flatMap(([name, value]) => [`--${name}`, value]);
   execFileSync(python, [generator, 'gen', '--out', pages, '--quiet', ...asked]);
   const spent = { ours: 0, plain: 0 };
+  const structure: Tally = {};
   const engine = options.plain === 'no' ? null : await plainEngine();
   const truths = readdirSync(pages)
     .filter((name) => name.endsWith('.json'))
@@ -100,6 +109,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
       const reading = await readPage({ drawn, dpi: truth.dpi, target: path.join(folder, 'read.jpg'), wish: {} });
       writeFileSync(path.join(folder, `${truth.id}.reading.json`), JSON.stringify(reading));
       writeFileSync(path.join(ours, `${truth.id}.json`), JSON.stringify(hypothesisOf(reading)));
+      tallyStructure(structure, truth.blocks, documentOf(reading));
     });
     if (engine === null) continue;
     spent.plain += await cpuSeconds(async () => {
@@ -114,6 +124,7 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
     '',
     ...confidenceLines(truths.flatMap((truth) => judgedPage(truth, ours))),
     ...warningLines(truths, folder),
+    `blocks found as what they are: ${tallyText(structure)}`,
     ...(engine === null
       ? []
       : [

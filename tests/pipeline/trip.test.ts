@@ -102,6 +102,27 @@ describe('a scanned PDF', () => {
     expect((await archivist.get(`/api/pages/${page.id}/reading`)).body.recipe.skewDegrees).toBe(2);
   });
 
+  it('has one zone of it read again for an editor, in the pixels of its picture, and changes nothing', async () => {
+    const [, page] = await archivist.pagesOf(manualId);
+    const editor = await server.as('editor');
+    const { body: before } = await editor.get(`/api/pages/${page.id}`);
+    const step = before.document.content[2];
+    const reply = await editor.post(`/api/pages/${page.id}/zone-readings`, { zone: step.attrs.zone, as: 'line' });
+    expect(reply.status).toBe(200);
+    expect(reply.body.words.map(({ text }: { text: string }) => text).join(' ')).toBe(
+      'b. Tune the core of coil L5 for the greatest reading.',
+    );
+    expect(reply.body.blocks).toMatchObject([{ type: 'step', attrs: { marker: 'b.' } }]);
+    const [x, y] = reply.body.words[0].box;
+    expect(Math.abs(x - step.attrs.zone[0])).toBeLessThan(12);
+    expect(Math.abs(y - step.attrs.zone[1])).toBeLessThan(20);
+    expect((await editor.get(`/api/pages/${page.id}`)).body.revision).toBe(before.revision);
+    const outside = await editor.post(`/api/pages/${page.id}/zone-readings`, { zone: [90_000, 10, 40, 40] });
+    expect(outside).toMatchObject({ status: 422, body: { detail: expect.stringContaining('outside the page') } });
+    const reader = await server.as('reader');
+    expect((await reader.post(`/api/pages/${page.id}/zone-readings`, { zone: [0, 0, 9, 9] })).status).toBe(403);
+  });
+
   it('waits while its manual is paused, and stops when it is cancelled', async () => {
     const other = await archivist.newManual('Paused');
     await archivist.post(`/api/manuals/${other}/reading-queue`, { do: 'pause' });

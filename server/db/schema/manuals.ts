@@ -11,6 +11,10 @@ export const manuals = sqliteTable('manuals', {
   createdAt: integer('created_at', { mode: 'timestamp_ms' }).notNull(),
   createdBy: text('created_by').notNull(),
   deletedAt: integer('deleted_at', { mode: 'timestamp_ms' }),
+  /** Whether what people correct settles and raises doubts on the manual's other pages. */
+  learns: integer({ mode: 'boolean' }).notNull().default(true),
+  /** Units as this manual writes them, beyond those that every manual may use. */
+  ownUnits: text('own_units', { mode: 'json' }).$type<string[]>().notNull().default([]),
   readingPaused: integer('reading_paused', { mode: 'boolean' }).notNull().default(false),
 });
 

@@ -1,6 +1,7 @@
 import { index, integer, real, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import type { PageState } from '#shared/api/pages.ts';
+import type { PageHalf, PageState } from '#shared/api/pages.ts';
 import type { Reading } from '#shared/reading/reading.ts';
+import type { ReadingWarning } from '#shared/reading/page-warning.ts';
 import { manuals, sources } from './manuals.ts';
 
 export const pages = sqliteTable(
@@ -14,6 +15,10 @@ export const pages = sqliteTable(
       .notNull()
       .references(() => sources.id),
     sourcePage: integer('source_page').notNull(),
+    /** A double-page spread that was divided gives two pages, one of each half. */
+    half: text().$type<PageHalf>().notNull().default('whole'),
+    /** Where the spread was divided, as a share of its width. */
+    cutShare: real('cut_share'),
     position: integer().notNull(),
     label: text().notNull(),
     state: text().$type<PageState>().notNull(),
@@ -21,6 +26,8 @@ export const pages = sqliteTable(
     /** The picture as drawn from the source, before any straightening. */
     drawnKey: text('drawn_key'),
     drawnDpi: real('drawn_dpi'),
+    /** The words that the source itself carries for this page, where it has any. */
+    layerKey: text('layer_key'),
     /** The picture as read: upright and straight. Boxes are in its pixels. */
     imageKey: text('image_key'),
     width: integer(),
@@ -29,9 +36,11 @@ export const pages = sqliteTable(
     confidence: real(),
     revision: integer().notNull().default(0),
     doubtCount: integer('doubt_count').notNull().default(0),
+    /** What the last reading found wrong with the picture. */
+    warnings: text({ mode: 'json' }).$type<ReadingWarning[]>().notNull().default([]),
   },
   (table) => [
-    uniqueIndex('one_page_of_a_source_page').on(table.sourceId, table.sourcePage),
+    uniqueIndex('one_page_of_a_source_page').on(table.sourceId, table.sourcePage, table.half),
     index('pages_of_a_manual').on(table.manualId, table.position),
   ],
 );

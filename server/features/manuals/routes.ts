@@ -3,7 +3,7 @@ import { pipeline } from 'node:stream/promises';
 import * as manualApi from '#shared/api/manuals.ts';
 import * as sourceApi from '#shared/api/sources.ts';
 import { AppError } from '#shared/kit/app-error.ts';
-import type { Inspector } from '#server/jobs/inspector.ts';
+import type { SideWorker } from '#server/jobs/side-worker.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
@@ -12,7 +12,7 @@ import { binManual, createManual, existingManual, manualReply, restoreManual, up
 import { type AddPages, sourceKey, takeIn } from './sources.ts';
 import { receiveFiles } from './upload.ts';
 
-export function manualRoutes(api: ApiRouter, tools: Tools & { inspector: Inspector; addPages: AddPages }): void {
+export function manualRoutes(api: ApiRouter, tools: Tools & { sideWorker: SideWorker; addPages: AddPages }): void {
   const { db } = tools;
   serve(api, manualApi.listManuals, ({ query }) => {
     const rows = manualRows(db, query.bin, { limit: query.limit + 1, offset: offsetOf(query) });
@@ -31,7 +31,7 @@ export function manualRoutes(api: ApiRouter, tools: Tools & { inspector: Inspect
   sourceRoutes(api, tools);
 }
 
-function sourceRoutes(api: ApiRouter, tools: Tools & { inspector: Inspector; addPages: AddPages }): void {
+function sourceRoutes(api: ApiRouter, tools: Tools & { sideWorker: SideWorker; addPages: AddPages }): void {
   const { db, config, files } = tools;
   const receive = receiveFiles(path.join(config.dataDir, 'incoming'), config.limits.uploadBytes);
   serve(api, sourceApi.listSources, ({ params, query }) => {

@@ -43,10 +43,11 @@ export function createManual({ db, now }: Tools, who: Who, given: ManualInput): 
   return manualReply(db, row.id);
 }
 
-type Change = { [K in keyof ManualInput]?: ManualInput[K] | undefined };
+type Changeable = ManualInput & Pick<Manual, 'learns' | 'ownUnits'>;
+type Change = { [K in keyof Changeable]?: Changeable[K] | undefined };
 
 export function updateManual(
-  { db }: Tools,
+  { db, announce, wake }: Tools,
   who: Who,
   { manualId, change }: { manualId: string; change: Change },
 ): Manual {
@@ -56,7 +57,10 @@ export function updateManual(
     db.transaction((tx) => {
       tx.update(manuals).set(set).where(eq(manuals.id, manualId)).run();
       record(tx, who, { did: 'changed a manual', subject: row.title, subjectId: manualId, details: set });
+      if ('learns' in set || 'ownUnits' in set)
+        announce(tx, 'lessons.changed', { subjectId: manualId, manualId, wish: { after: 0 } });
     });
+    wake();
   }
   return manualReply(db, manualId);
 }

@@ -6,7 +6,7 @@ import { AppError, type ErrorCode } from '#shared/kit/app-error.ts';
 import { sources } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
-import type { Inspector } from '#server/jobs/inspector.ts';
+import type { SideWorker } from '#server/jobs/side-worker.ts';
 import { WorkerFailure } from '#server/jobs/worker-pool.ts';
 import type { SignedIn } from '#server/http/session.ts';
 import type { Tools } from '#server/http/tools.ts';
@@ -14,7 +14,7 @@ import { findSameBytes, sourceReply } from './queries.ts';
 import { existingManual } from './service.ts';
 import type { ArrivedFile } from './upload.ts';
 
-/** What the inspector finds in a file: its kind by its bytes, and how many pages; or why it cannot be taken. */
+/** What examining finds in a file: its kind by its bytes, and how many pages; or why it cannot be taken. */
 export const inspection = z.union([
   z.object({ mediaType: z.string(), pageCount: z.number().int().positive() }),
   z.object({ refused: z.string(), code: z.enum(['wrong-kind', 'too-large', 'cannot-do']) }),
@@ -22,7 +22,7 @@ export const inspection = z.union([
 type Refusal = { refused: string; code: ErrorCode };
 
 export type AddPages = (connection: Connection, source: typeof sources.$inferSelect, pageCount: number) => void;
-type SourceTools = Tools & { inspector: Inspector; addPages: AddPages };
+type SourceTools = Tools & { sideWorker: SideWorker; addPages: AddPages };
 type Who = Pick<SignedIn, 'id' | 'name'>;
 type Answer = Source & { code?: ErrorCode };
 
@@ -71,7 +71,7 @@ async function takeInOne(
 }
 
 async function examine(
-  { inspector, config }: SourceTools,
+  { sideWorker, config }: SourceTools,
   file: ArrivedFile,
 ): Promise<z.infer<typeof inspection> | Refusal> {
   if (file.tooLarge) {
@@ -81,7 +81,7 @@ async function examine(
   if (file.bytes === 0) return { refused: 'This file is empty: it has no bytes at all.', code: 'cannot-do' };
   const input = { path: file.path, mostPages: config.limits.pages, mostMegapixels: config.limits.pictureMegapixels };
   try {
-    return inspection.parse(await inspector.inspect(input));
+    return inspection.parse(await sideWorker.run('inspect', input));
   } catch (error) {
     if (!(error instanceof WorkerFailure)) throw error;
     return { refused: `This file could not be examined. ${error.message}`, code: 'cannot-do' };

@@ -1,9 +1,24 @@
+import { writeFile } from 'node:fs/promises';
 import { OPS, type PDFDocumentProxy, type PDFPageProxy } from 'pdfjs-dist/legacy/build/pdf.mjs';
-import sharp, { type Sharp } from 'sharp';
+import sharp, { type OutputInfo, type Sharp } from 'sharp';
+import type { Zone } from '#shared/document/define-block.ts';
+import type { TextLayer } from '#shared/reading/text-layer.ts';
 import { openPdf, pdfProblem } from './pdf.ts';
+import { textLayerOf } from './text-layer.ts';
 
-export type DrawInput = { path: string; mediaType: string; sourcePage: number; target: string; mostMegapixels: number };
-export type Drawn = { width: number; height: number; dpi: number };
+/** Half of a spread that was divided at this share of its width. */
+export type Part = { half: 'left' | 'right'; cutShare: number };
+export type DrawInput = {
+  path: string;
+  mediaType: string;
+  sourcePage: number;
+  part: Part | null;
+  target: string;
+  /** Where the words that the source carries for the page go, as JSON. */
+  layerTarget: string;
+  mostMegapixels: number;
+};
+export type Drawn = { width: number; height: number; dpi: number; hasLayer: boolean };
 
 /** A page that will fail the same way however often it is tried. */
 export class HopelessPage extends Error {
@@ -23,13 +38,13 @@ export async function drawPage(input: DrawInput): Promise<Drawn> {
   return input.mediaType === 'application/pdf' ? drawPdfPage(input) : drawPicture(input);
 }
 
-async function drawPicture({ path, sourcePage, target, mostMegapixels }: DrawInput): Promise<Drawn> {
+async function drawPicture({ path, sourcePage, part, target, mostMegapixels }: DrawInput): Promise<Drawn> {
   const options = { page: sourcePage, limitInputPixels: mostMegapixels * 1e6, failOn: 'error' } as const;
   try {
     const { density } = await sharp(path, options).metadata();
     const upright = sharp(path, options).autoOrient().flatten({ background: 'white' }).toColourspace('srgb');
-    const { width, height } = await writePicture(upright, target);
-    return { width, height, dpi: believableDpi(density, height) };
+    const { width, height } = await writePicture(upright, part, target);
+    return { width, height, dpi: believableDpi(density, height), hasLayer: false };
   } catch (error) {
     throw new HopelessPage(
       `This picture cannot be decoded: ${error instanceof Error ? firstLine(error.message) : 'unknown fault'}.`,
@@ -60,22 +75,24 @@ async function documentOf(path: string): Promise<PDFDocumentProxy> {
   return pdf;
 }
 
-async function drawPdfPage({ path, sourcePage, target }: DrawInput): Promise<Drawn> {
+async function drawPdfPage({ path, sourcePage, part, target, layerTarget }: DrawInput): Promise<Drawn> {
   const { pdf, page } = await pageOf(path, sourcePage);
   try {
     const base = page.getViewport({ scale: 1 });
     const scale = Math.min(pdfDpi / pointsPerInch, Math.sqrt(mostDrawnPixels / (base.width * base.height)));
     const viewport = page.getViewport({ scale });
-    const [width, height] = [Math.max(1, Math.round(viewport.width)), Math.max(1, Math.round(viewport.height))];
-    const { canvas } = (pdf.canvasFactory as CanvasFactory).create(width, height);
+    const size = { width: Math.max(1, Math.round(viewport.width)), height: Math.max(1, Math.round(viewport.height)) };
+    const { canvas } = (pdf.canvasFactory as CanvasFactory).create(size.width, size.height);
     await page.render({ canvas: canvas as never, viewport, background: 'white' }).promise;
-    const raw = sharp(canvas.data(), { raw: { width, height, channels: 4 } }).removeAlpha();
-    const { deviation } = await writePicture(raw, target);
+    const raw = sharp(canvas.data(), { raw: { ...size, channels: 4 } }).removeAlpha();
+    const { width, height, deviation } = await writePicture(raw, part, target);
     canvas.width = 0;
     if (deviation < 0.5 && (await holdsPictures(page))) {
       throw new HopelessPage('The picture on this page is damaged or far too large: it came out blank.');
     }
-    return { width, height, dpi: Math.round(scale * pointsPerInch) };
+    const layer = partOfLayer(await textLayerOf(page, viewport), part, size.width);
+    if (layer !== null) await writeFile(layerTarget, JSON.stringify(layer));
+    return { width, height, dpi: Math.round(scale * pointsPerInch), hasLayer: layer !== null };
   } finally {
     page.cleanup();
   }
@@ -118,9 +135,10 @@ async function holdsPictures(page: PDFPageProxy): Promise<boolean> {
 /** Writes the picture as JPEG, grey unless its colours carry something; tells its size and how much it varies. */
 async function writePicture(
   picture: Sharp,
+  part: Part | null,
   target: string,
 ): Promise<{ width: number; height: number; deviation: number }> {
-  const { data, info } = await picture.raw().toBuffer({ resolveWithObject: true });
+  const { data, info } = await partOf(await picture.raw().toBuffer({ resolveWithObject: true }), part);
   const raw = { width: info.width, height: info.height, channels: info.channels };
   const small = await sharp(data, { raw })
     .resize(200, 200, { fit: 'fill' })
@@ -133,6 +151,32 @@ async function writePicture(
   const inked = chroma > colourWorthKeeping ? out : out.greyscale().toColourspace('b-w');
   await inked.jpeg({ quality: jpegQuality, chromaSubsampling: '4:4:4' }).toFile(target);
   return { width: info.width, height: info.height, deviation };
+}
+
+type Raw = { data: Buffer; info: OutputInfo };
+
+async function partOf({ data, info }: Raw, part: Part | null): Promise<Raw> {
+  if (part === null) return { data, info };
+  const { left, width } = spanOf(part, info.width);
+  return sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels } })
+    .extract({ left, top: 0, width, height: info.height })
+    .raw()
+    .toBuffer({ resolveWithObject: true });
+}
+
+/** Columns of pixels that a half takes of the whole picture's. */
+function spanOf({ half, cutShare }: Part, width: number): { left: number; width: number } {
+  const cut = Math.min(width - 1, Math.max(1, Math.round(width * cutShare)));
+  return half === 'left' ? { left: 0, width: cut } : { left: cut, width: width - cut };
+}
+
+function partOfLayer(layer: TextLayer | null, part: Part | null, width: number): TextLayer | null {
+  if (layer === null || part === null) return layer;
+  const span = spanOf(part, width);
+  const words = layer.words
+    .map(({ text, box: [x, y, w, h] }) => ({ text, box: [x - span.left, y, w, h] as Zone }))
+    .filter(({ box: [x, , w] }) => x + w / 2 >= 0 && x + w / 2 < span.width);
+  return { ...layer, words };
 }
 
 /** Standard deviation of lightness and mean distance between the colour channels, both of 255, of packed RGB pixels. */

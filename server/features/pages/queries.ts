@@ -55,6 +55,8 @@ export const pageSummary = (row: PageRow): PageSummary => ({
   doubtCount: row.doubtCount,
   revision: row.revision,
   problem: row.problem,
+  half: row.half,
+  warnings: row.warnings,
   imageVersion: imageVersion(row),
 });
 

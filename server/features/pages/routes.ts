@@ -5,6 +5,7 @@ import { existingManual } from '#server/features/manuals/index.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
+import { dividePage, joinPage } from './division.ts';
 import { sendImage } from './image.ts';
 import { newestReading, pageRows, pageSummary } from './queries.ts';
 import { attend, existingPage, readAgain, relabel, steerReading } from './service.ts';
@@ -29,6 +30,10 @@ export function pageRoutes(api: ApiRouter, tools: Tools): void {
     return { ...content, id: String(reading.id), blocks, createdAt: reading.createdAt.toISOString() };
   });
   serve(api, pageApi.readAgain, ({ user, params, body }) => readAgain(tools, user, { ...params, wish: body?.recipe }));
+  serve(api, pageApi.dividePage, ({ user, params, body }) => ({
+    items: dividePage(tools, user, { ...params, cutShare: body?.cutShare ?? 0.5 }),
+  }));
+  serve(api, pageApi.joinPage, ({ user, params }) => joinPage(tools, user, params.pageId));
   serve(api, pageApi.lookAtPage, ({ params }) => {
     attend(tools, params.pageId);
     return { ok: true as const };

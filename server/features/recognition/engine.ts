@@ -1,7 +1,8 @@
 import { createRequire } from 'node:module';
 import path from 'node:path';
 import Tesseract, { OEM, PSM, type Worker } from 'tesseract.js';
-import type { ReadingWord } from '#shared/reading/reading.ts';
+import type { Zone } from '#shared/document/define-block.ts';
+import type { SpelledWord } from '#shared/reading/glyphs/spelled.ts';
 
 const require = createRequire(import.meta.url);
 /** The language data of the npm package; its `best_int` set is the one for the LSTM engine. */
@@ -38,7 +39,7 @@ const modes = {
 type How = { segmentation: keyof typeof modes; dpi: number };
 
 /** Recognises the words of an encoded picture whose resolution is known. Boxes are in its pixels. */
-export async function recognise(picture: Buffer, { segmentation, dpi }: How): Promise<ReadingWord[]> {
+export async function recognise(picture: Buffer, { segmentation, dpi }: How): Promise<SpelledWord[]> {
   const engine = await startedWorker();
   await setUp(engine, { segmentation, dpi });
   const { data } = await engine.recognize(picture, {}, { text: false, blocks: true });
@@ -46,17 +47,20 @@ export async function recognise(picture: Buffer, { segmentation, dpi }: How): Pr
     block.paragraphs
       .flatMap((paragraph) => paragraph.lines)
       .flatMap((line, lineIndex) =>
-        line.words.map(({ text, confidence, bbox: { x0, y0, x1, y1 } }) => ({
+        line.words.map(({ text, confidence, bbox, symbols }) => ({
           text,
           raw: text,
           confidence,
-          box: [x0, y0, x1 - x0, y1 - y0] as ReadingWord['box'],
+          box: zoneOf(bbox),
+          symbols: symbols.map((symbol) => ({ text: symbol.text, box: zoneOf(symbol.bbox) })),
           line: blockIndex * linesInBlockAtMost + lineIndex,
           block: blockIndex,
         })),
       ),
   );
 }
+
+const zoneOf = ({ x0, y0, x1, y1 }: Tesseract.Bbox): Zone => [x0, y0, x1 - x0, y1 - y0];
 
 let lastSetUp = '';
 

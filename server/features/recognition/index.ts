@@ -1,1 +1,2 @@
 export { readStep } from './steps.ts';
+export { recognitionRoutes } from './routes.ts';

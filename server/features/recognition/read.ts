@@ -1,10 +1,18 @@
+import { readFile } from 'node:fs/promises';
 import type { Zone } from '#shared/document/define-block.ts';
+import { mendBullets } from '#shared/reading/bullets.ts';
+import { inReadingOrder } from '#shared/reading/columns.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
+import { wholeFigures } from '#shared/reading/figure-zones.ts';
+import { lookedAt } from '#shared/reading/glyphs/look.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
 import { unreadMargins } from '#shared/reading/picture/margins.ts';
-import type { Reading, ReadingWord, RecipeWish } from '#shared/reading/reading.ts';
+import { gutterOf } from '#shared/reading/picture/spread.ts';
+import { type Reading, type ReadingWord, type RecipeWish, meanConfidence } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
+import { chooseWords, textLayer } from '#shared/reading/text-layer.ts';
+import type { ReadingWarning } from '#shared/reading/page-warning.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { isNearlyBlank, surelyRead, warningsOf, withTurnUnsure } from '#shared/reading/warnings.ts';
 import { engineName, recognise } from './engine.ts';
@@ -12,7 +20,14 @@ import { type Prepared, prepare } from './prepare.ts';
 import { uprightTurn } from './upright.ts';
 import { readMargins, rereadCells, rereadFigures } from './reread.ts';
 
-export type ReadInput = { drawn: string; dpi: number; target: string; wish: RecipeWish };
+export type ReadInput = {
+  drawn: string;
+  dpi: number;
+  target: string;
+  wish: RecipeWish;
+  /** The words that the source itself carries for the page, as JSON; null where it has none. */
+  layer?: string | null;
+};
 
 /** A drawing has a few labels; a zone that words fill to this share is text that stands close together. */
 const mostWordsInFigure = 0.22;
@@ -35,15 +50,16 @@ export async function readPage(input: ReadInput): Promise<Reading> {
 
 const isBlank = ({ warnings = [] }: Reading): boolean => warnings.some(({ kind }) => kind === 'nearly-blank');
 
-async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Reading> {
+async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
   const { shown, segmentation, transform } = prepared;
-  const read = await recognisedWords(prepared);
-  const looked = await secondLooks(prepared, read);
+  const looked = await secondLooks(prepared, await recognisedWords(prepared));
   const { quality } = prepared;
   const { figures } = looked;
   const hasNothing = figures.length === 0 && isNearlyBlank(quality, looked.words);
-  const words = hasNothing ? surelyRead(looked.words) : looked.words;
+  const filed = layer === null ? null : textLayer.parse(JSON.parse(await readFile(layer, 'utf8')));
+  const read = hasNothing ? surelyRead(looked.words) : looked.words;
+  const { words, wordsFrom, warnings } = chooseWords(read, filed, { transform, wish: wish.wordsFrom });
   const confidence = meanConfidence(words);
   return {
     recipe: {
@@ -55,6 +71,7 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
       rulesRemoved: prepared.rulesRemoved,
       flattened: prepared.flattened,
       turnDegrees: wish.turnDegrees ?? 0,
+      ...(filed === null ? {} : { wordsFrom }),
     },
     confidence,
     width: shown.width,
@@ -62,8 +79,15 @@ async function readAsItLies({ drawn, dpi, target, wish }: ReadInput): Promise<Re
     transform,
     words,
     figures,
-    warnings: warningsOf({ dpi, quality, words, confidence }),
+    warnings: [...warningsOf({ dpi, quality, words, confidence }), ...warnings, ...spreadWarning(prepared)],
   };
+}
+
+function spreadWarning({ coarse, coarseScale, shown }: Prepared): ReadingWarning[] {
+  const at = gutterOf(coarse, shown.dpi / coarseScale);
+  return at === null
+    ? []
+    : [{ kind: 'double-page', detail: `they seem to meet at ${Math.round(at * 100)} % of the width` }];
 }
 
 const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dpi * scale);
@@ -71,7 +95,8 @@ const dpiForEngine = ({ shown, scale }: Prepared): number => Math.round(shown.dp
 async function recognisedWords(prepared: Prepared): Promise<ReadingWord[]> {
   const { segmentation, scale } = prepared;
   const read = await recognise(prepared.picture, { segmentation, dpi: dpiForEngine(prepared) });
-  return read.filter(({ text }) => text.trim() !== '').map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
+  const printed = read.filter(({ text }) => text.trim() !== '');
+  return lookedAt(printed, prepared.clean).map((word) => ({ ...word, box: scaled(word.box, 1 / scale) }));
 }
 
 /** Doubtful cells, drawings and passed-over margins are read on their own; then the whole is mended. */
@@ -83,9 +108,10 @@ async function secondLooks(
   const page = { picture: clean, scale, dpi: dpiForEngine(prepared) };
   const withMargins = await readMargins(read, unreadIn(prepared, read), page);
   const withCells = await rereadCells(withMargins, page);
-  const figures = figuresOf(prepared, repairWords(withCells));
+  const repaired = repairWords(withCells);
+  const figures = wholeFigures(figuresOf(prepared, repaired), withoutSpecks(repaired), prepared.shown.dpi);
   const labelled = await rereadFigures(withCells, figures, { ...page, picture: lined });
-  return { words: mendTables(repairWords(labelled)), figures };
+  return { words: mendBullets(inReadingOrder(mendTables(repairWords(labelled)), figures)), figures };
 }
 
 function unreadIn({ coarseClean, coarseScale, shown }: Prepared, words: readonly ReadingWord[]): Zone[] {
@@ -94,12 +120,6 @@ function unreadIn({ coarseClean, coarseScale, shown }: Prepared, words: readonly
 }
 
 const scaled = (box: Zone, by: number): Zone => box.map((each) => Math.round(each * by)) as Zone;
-
-/** By letters, not by words: a stray speck must not weigh as much as a line. */
-function meanConfidence(words: readonly ReadingWord[]): number {
-  const letters = words.reduce((sum, { text }) => sum + text.length, 0);
-  return letters === 0 ? 0 : words.reduce((sum, { text, confidence }) => sum + confidence * text.length, 0) / letters;
-}
 
 /** Words that are surely words; what the engine made of the strokes of a drawing is not. */
 const surelyWord = 60;

@@ -1,5 +1,6 @@
 import type { Zone } from '#shared/document/define-block.ts';
 import { type DoubtfulCell, betterReading, doubtfulCells, withCellsReplaced } from '#shared/reading/doubtful-cells.ts';
+import { lookedAt } from '#shared/reading/glyphs/look.ts';
 import { mergedLabels } from '#shared/reading/labels.ts';
 import { type GreyPicture, blankPicture } from '#shared/reading/picture/grey.ts';
 import type { ReadingWord } from '#shared/reading/reading.ts';
@@ -61,23 +62,23 @@ export async function readMargins(
   return added;
 }
 
-async function readPiece(
+/** Reads one zone, whose box and whose words' boxes are those of the page as shown; the picture is `scale` times as large. */
+export async function readPiece(
   zone: Zone,
   { picture, scale, dpi }: Picture,
-  segmentation: 'line' | 'labels',
+  segmentation: 'line' | 'labels' | 'one-column',
 ): Promise<ReadingWord[]> {
   const [x, y, width, height] = zone.map((each) => Math.round(each * scale)) as Zone;
   const area: Zone = [x - beyond, y - beyond, width + 2 * beyond, height + 2 * beyond];
   const piece = cut(picture, area);
   if (piece === null) return [];
   const read = await recognise(encoded(piece), { segmentation, dpi });
-  return read
-    .filter(({ text }) => text.trim() !== '')
-    .map((word) => {
-      const [bx, by, bw, bh] = word.box;
-      const box = [bx + area[0] - margin, by + area[1] - margin, bw, bh].map((each) => Math.round(each / scale));
-      return { ...word, box: box as Zone };
-    });
+  const printed = read.filter(({ text }) => text.trim() !== '');
+  return lookedAt(printed, piece).map((word) => {
+    const [bx, by, bw, bh] = word.box;
+    const box = [bx + area[0] - margin, by + area[1] - margin, bw, bh].map((each) => Math.round(each / scale));
+    return { ...word, box: box as Zone };
+  });
 }
 
 /** The piece of the picture on white paper; null where there is no ink in it. */

@@ -25,7 +25,9 @@ export const readStep = (tools: Tools): HeavyStep => ({
     const target = incomingFile(tools, `${page.id}-read.jpg`);
     await mkdir(path.dirname(target), { recursive: true });
     const wish = recipeWish.catch({}).parse(job.wish ?? {});
-    return { drawn: await tools.files.localPath(page.drawnKey), dpi: page.drawnDpi ?? 300, target, wish };
+    const drawn = await tools.files.localPath(page.drawnKey);
+    const layer = page.layerKey === null ? null : await tools.files.localPath(page.layerKey);
+    return { drawn, dpi: page.drawnDpi ?? 300, target, wish, layer };
   },
   async keep(job, answer): Promise<Kept> {
     // Another reading may straighten the page otherwise, so each has a picture of its own.

@@ -124,6 +124,8 @@ export function addRevision(
   });
   const state = origin === 'person' ? 'corrected' : page.state;
   changePage(tx, page.id, { revision: row.number, doubtCount, state });
-  tools.announce(tx, 'revision.saved', { subjectId: page.id, manualId: page.manualId });
+  const subject = { subjectId: page.id, manualId: page.manualId };
+  tools.announce(tx, 'revision.saved', subject);
+  if (origin === 'person') tools.announce(tx, 'page.corrected', subject);
   return row;
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { blockAttributes, defineBlock } from '#shared/document/define-block.ts';
+import { blockAttributes, defineBlock, textAttribute } from '#shared/document/define-block.ts';
 
 /** A drawing or photograph: the crop of the page image at its zone, with words for those who cannot see it. */
 export const figure = defineBlock({
@@ -7,5 +7,5 @@ export const figure = defineBlock({
   group: 'block',
   content: null,
   attributes: z.object({ ...blockAttributes, description: z.string().max(500).default('') }),
-  plainText: () => '',
+  plainText: (node) => textAttribute(node, 'description'),
 });

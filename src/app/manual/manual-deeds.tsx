@@ -3,13 +3,14 @@ import { Link, useNavigate } from 'react-router';
 import type { Manual } from '#shared/api/manuals.ts';
 import { useCan } from '#src/api/session.ts';
 import { BinManual, EditManual } from '#src/features/library/manual-dialogs.tsx';
+import { HabitsDialog } from '#src/features/reading/habits-dialog.tsx';
 import { Button } from '#src/ui/button.tsx';
 import { toast } from '#src/ui/toast.ts';
 
 /** What can be done with the manual as a whole. */
 export function ManualDeeds({ manual, addScans }: { manual: Manual; addScans: ReactNode }) {
   const mayChange = useCan('add-manuals');
-  const [open, setOpen] = useState<'edit' | 'bin' | null>(null);
+  const [open, setOpen] = useState<'edit' | 'habits' | 'bin' | null>(null);
   const navigate = useNavigate();
   const close = (): void => setOpen(null);
   return (
@@ -22,11 +23,15 @@ export function ManualDeeds({ manual, addScans }: { manual: Manual; addScans: Re
           <Button look="quiet" onClick={() => setOpen('edit')}>
             Correct the record
           </Button>
+          <Button look="quiet" onClick={() => setOpen('habits')}>
+            How it is read
+          </Button>
           <Button look="quiet" onClick={() => setOpen('bin')}>
             Put in the bin
           </Button>
           <div className="ml-auto">{addScans}</div>
           <EditManual isOpen={open === 'edit'} onOpenChange={close} manual={manual} />
+          <HabitsDialog isOpen={open === 'habits'} onOpenChange={close} manual={manual} />
           <BinManual
             isOpen={open === 'bin'}
             onOpenChange={close}

@@ -3,10 +3,12 @@ import { Link, Navigate, useParams } from 'react-router';
 import { can } from '#shared/access/roles.ts';
 import type { Page } from '#shared/api/pages.ts';
 import { onePage } from '#src/api/pages.ts';
-import { me } from '#src/api/session.ts';
+import { me, useCan } from '#src/api/session.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { Workspace } from '#src/features/editor/workspace.tsx';
 import { HistoryButton } from '#src/features/history/history-button.tsx';
+import { PageWarnings } from '#src/features/reading/page-warnings.tsx';
+import { ReadPageDialog } from '#src/features/reading/read-page-dialog.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
 import { useTitle } from '#src/lib/use-title.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -34,18 +36,25 @@ export function Component() {
 }
 
 function Correcting({ page }: { page: Page }) {
+  const mayRead = useCan('run-recognition');
   return (
     <LiveValues manualId={page.manualId}>
       <Workspace
         page={page}
         addressOf={(id) => `/pages/${id}`}
-        settingBar={<SettingBar manualId={page.manualId} startsOpen={false} />}
+        settingBar={
+          <>
+            <PageWarnings page={page} />
+            <SettingBar manualId={page.manualId} startsOpen={false} />
+          </>
+        }
         links={(isDirty) => (
           <>
             <Button asChild>
               <Link to={`/pages/${page.id}/read`}>Read this page</Link>
             </Button>
             <HistoryButton pageId={page.id} label={page.label} mayRestore hasUnsaved={isDirty} />
+            {mayRead && page.imageVersion !== null ? <ReadPageDialog page={page} /> : null}
           </>
         )}
       />

@@ -1,6 +1,6 @@
 import type { Editor } from '@tiptap/core';
 import { useEditorState } from '@tiptap/react';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
 import { type Doubt, doubtAt, doubtsOf } from './doubts.ts';

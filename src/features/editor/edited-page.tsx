@@ -23,12 +23,14 @@ import { MergeDialog } from './merge-dialog.tsx';
 import { PageNotices } from './page-notices.tsx';
 import { PartStrip } from './part-strip.tsx';
 import { type PrintedNumber, printedNumber } from './printed-number.ts';
+import { ReadAgainPanel } from './read-again-panel.tsx';
 import { SaveBar } from './save-bar.tsx';
 import { Toolbar } from './toolbar.tsx';
 import { useDoubtWalk } from './use-doubt-walk.ts';
 import { useDraft } from './use-draft.ts';
 import { usePageEditor } from './use-page-editor.ts';
 import { useSaving } from './use-saving.ts';
+import { type ZonePlace, zonePlaces } from './zone-place.ts';
 import '#src/blocks/page.css';
 
 type Props = {
@@ -49,6 +51,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
   const [note, setNote] = useState('');
   const [isKeysOpen, setKeysOpen] = useState(false);
   const [live, setLive] = useState<PrintedNumber | string | null>(null);
+  const [places, setPlaces] = useState<readonly ZonePlace[] | null>(null);
   const { boxes, shown, doubtCount } = usePlaces(editor);
   const goTo = useGoTo(editor, link);
   useDraft({ editor, pageId: page.id, baseRevision: saving.base.revision, isDirty: () => saving.isDirty });
@@ -64,6 +67,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
     previous: () => walk.goBeside(-1),
     settle: walk.settle,
     live: () => setLive(printedNumber(editor)),
+    readAgain: () => setPlaces(zonePlaces(editor)),
     save: () => void save(),
     help: () => setKeysOpen(true),
   };
@@ -91,7 +95,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
         page={
           <>
             <SaveBar {...saving} note={note} onNote={setNote} onSave={deeds.save} />
-            <Toolbar editor={editor} onMakeLive={deeds.live} />
+            <Toolbar editor={editor} onMakeLive={deeds.live} onReadAgain={deeds.readAgain} />
             <h2 className="sr-only">Page text</h2>
             <div ref={link.leaf} className="leaf-scroll" onPointerOver={link.onTextHover}>
               <EditorContent editor={editor} className="page-sheet" />
@@ -102,6 +106,9 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
           <>
             {live === null ? null : (
               <MakeLivePanel {...{ editor, page }} key={keyOf(live)} found={live} onClose={() => setLive(null)} />
+            )}
+            {places === null ? null : (
+              <ReadAgainPanel {...{ editor, page, places }} key={keyOfPlaces(places)} onClose={() => setPlaces(null)} />
             )}
             <DoubtStrip editor={editor} walk={walk} onKeys={deeds.help} />
             <PartStrip editor={editor} />
@@ -115,6 +122,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
   );
 }
 
+const keyOfPlaces = (places: readonly ZonePlace[]): string => places.map(({ zone }) => zone.join()).join(';');
 const keyOf = (live: PrintedNumber | string): string => (typeof live === 'string' ? live : String(live.from));
 
 /** To the text of a zone, with the caret in it, and if wished to its place on the scan. */

@@ -1,5 +1,5 @@
 /** The keys of the workspace, each once: what is listed in the help is what is obeyed. `code` is the place on the keyboard. */
-export type DeedName = 'next' | 'previous' | 'settle' | 'save' | 'live' | 'help';
+export type DeedName = 'next' | 'previous' | 'settle' | 'save' | 'live' | 'readAgain' | 'help';
 type Key = {
   name: DeedName;
   shown: string;
@@ -22,6 +22,7 @@ export const deedKeys: readonly Key[] = [
     alt: true,
     ctrl: true,
   },
+  { name: 'readAgain', shown: 'Alt R', says: 'read the block or cell at the caret again', code: 'KeyR', alt: true },
   { name: 'save', shown: 'Ctrl S', says: 'save a revision', code: 'KeyS', ctrl: true },
   { name: 'help', shown: '?', says: 'these keys, while nothing is being typed', code: '?', isPlain: true },
 ];

@@ -4,7 +4,7 @@ import type { DocNode } from '#shared/document/define-block.ts';
 import { canonical } from '#src/blocks/compare/canonical.ts';
 import { compareBlock } from '#src/blocks/compare/compare-blocks.ts';
 import { ComparedText, wordForKind } from '#src/blocks/compare/compared-text.tsx';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Actions, Dialog } from '#src/ui/dialog.tsx';
 import { ToggleGroup } from '#src/ui/toggle-group.tsx';

@@ -2,7 +2,7 @@ import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { RevisionSummary } from '#shared/api/revisions.ts';
 import { restoreRevision, revisionsOfPage } from '#src/api/revisions.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { writtenTime } from '#src/lib/written.ts';
 import { Button } from '#src/ui/button.tsx';

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router';
 import type { Manual } from '#shared/api/manuals.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { ReadingState } from './reading-state.tsx';
 
 type Props = {

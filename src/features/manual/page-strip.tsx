@@ -3,7 +3,7 @@ import { type ReactNode, useState } from 'react';
 import type { PageSummary } from '#shared/api/pages.ts';
 import { pagesOfManual } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Empty } from '#src/ui/empty.tsx';
 import { Failure } from '#src/ui/failure.tsx';

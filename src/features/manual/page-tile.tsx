@@ -1,9 +1,10 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { PageSummary } from '#shared/api/pages.ts';
+import { warningKinds } from '#shared/reading/page-warning.ts';
 import { imageOf, readPageAgain } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
@@ -18,7 +19,7 @@ type Props = { manualId: string; page: PageSummary; isLabelling: boolean };
 /** One page of the strip: its picture, its name, and what is known about its text. */
 export function PageTile({ manualId, page, isLabelling }: Props) {
   const mayEdit = useCan('edit-pages');
-  const { id, label, state, confidence, doubtCount, problem } = page;
+  const { id, label, state, confidence, doubtCount, problem, warnings } = page;
   const { word, tone, shape } = pageLooks[state];
   const [first, second] = mayEdit
     ? [
@@ -59,6 +60,13 @@ export function PageTile({ manualId, page, isLabelling }: Props) {
           {word}
         </StateWord>
         {doubtCount === 0 ? null : <span className="doubtful">{counted(doubtCount, 'doubt')}</span>}
+        {warnings.map(({ kind }) => (
+          <span key={kind} title={warningKinds[kind].says}>
+            <StateWord tone="doubt" shape="question">
+              {warningKinds[kind].brief}
+            </StateWord>
+          </span>
+        ))}
       </div>
       {state === 'failed' ? <FailedPage manualId={manualId} page={page} problem={problem} /> : null}
       <div className="mt-1 flex flex-wrap gap-x-4">

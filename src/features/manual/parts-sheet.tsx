@@ -4,7 +4,7 @@ import { Link } from 'react-router';
 import type { z } from 'zod';
 import type { partRow } from '#shared/api/parts.ts';
 import { partsAsCsv, partsOfManual } from '#src/api/parts.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Empty } from '#src/ui/empty.tsx';
 import { Failure } from '#src/ui/failure.tsx';

@@ -2,7 +2,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Manual } from '#shared/api/manuals.ts';
 import { type Steering, steerReading } from '#src/api/manuals.ts';
 import { useCan } from '#src/api/session.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Progress } from '#src/ui/progress.tsx';

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { valuesAt } from '#src/api/quantities.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Failure } from '#src/ui/failure.tsx';
 import { Notice } from '#src/ui/notice.tsx';
 

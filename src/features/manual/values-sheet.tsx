@@ -3,7 +3,7 @@ import { useState } from 'react';
 import type { Quantity } from '#shared/api/quantities.ts';
 import { quantitiesOfManual } from '#src/api/quantities.ts';
 import { useCan } from '#src/api/session.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Empty } from '#src/ui/empty.tsx';
 import { Failure } from '#src/ui/failure.tsx';

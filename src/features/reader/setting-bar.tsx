@@ -8,7 +8,7 @@ import {
 } from '#src/blocks/live-value/live-values.tsx';
 import type { LiveStore } from '#src/blocks/live-value/live-store.ts';
 import { useSettingWords } from '#src/blocks/live-value/setting-words.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
 import { ToggleGroup } from '#src/ui/toggle-group.tsx';

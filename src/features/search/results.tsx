@@ -2,7 +2,7 @@ import { useInfiniteQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { SearchHit } from '#shared/api/search.ts';
 import { searchFor, type Wanted } from '#src/api/search.ts';
-import { counted } from '#src/lib/counted.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Empty } from '#src/ui/empty.tsx';
 import { Failure } from '#src/ui/failure.tsx';
