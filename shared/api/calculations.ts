@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { id, manualParams } from './common.ts';
+import { id, listOf, manualParams } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 import { inputs } from './quantities.ts';
 
@@ -32,4 +32,29 @@ export const getChangeSheet = defineEndpoint({
   query: z.object({ format: z.enum(['json', 'csv']).default('json') }),
   body: z.object({ before: inputs.default({}), after: inputs.default({}) }),
   reply: changeSheet,
+});
+
+const column = z.object({ name: z.string(), unit: z.string() });
+
+/** A table that formulas look into: each row is the key and then one number for each column, in the units of the heads. */
+export const channelTable = z.object({
+  id: z.string(),
+  title: z.string(),
+  source: z.string(),
+  key: column,
+  columns: z.array(column),
+  rows: z.array(z.array(z.number())),
+  pageId: id,
+  /** Rows that could not be taken, with the reason. */
+  left: z.array(z.string()),
+});
+export type ChannelTable = z.infer<typeof channelTable>;
+
+export const listChannelTables = defineEndpoint({
+  method: 'get',
+  path: '/api/manuals/:manualId/channel-tables',
+  summary: 'The channel tables of a manual’s own pages, for formulas to look into; the published ones are built in',
+  action: 'read-manuals',
+  params: manualParams,
+  reply: listOf(channelTable),
 });

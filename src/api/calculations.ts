@@ -4,6 +4,12 @@ import { addressOf, call } from './call.ts';
 import type { Inputs } from './quantities.ts';
 import { quantityKeys } from './quantity-keys.ts';
 
+export const channelTablesOfManual = (manualId: string) =>
+  queryOptions({
+    queryKey: [...quantityKeys.ofManual(manualId), 'channel-tables'],
+    queryFn: ({ signal }) => call(api.listChannelTables, { params: { manualId }, signal }).then(({ items }) => items),
+  });
+
 type Between = { before: Inputs; after: Inputs };
 
 export const changeSheetOf = (manualId: string, between: Between) =>

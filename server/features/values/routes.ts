@@ -11,7 +11,7 @@ import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { findSetting, quantityReply, quantityRows, settingRows } from './queries.ts';
-import { changeSheetRoutes } from './change-sheet.ts';
+import { calculationSheetRoutes } from './calculations.ts';
 import { createQuantity, deleteQuantity, programOf, updateQuantity } from './service.ts';
 
 export function valueRoutes(router: ApiRouter, tools: Tools): void {
@@ -37,7 +37,7 @@ export function valueRoutes(router: ApiRouter, tools: Tools): void {
     return { ok: true as const };
   });
   calculationRoutes(router, tools);
-  changeSheetRoutes(router, tools);
+  calculationSheetRoutes(router, tools);
   settingRoutes(router, tools);
 }
 

@@ -10,7 +10,7 @@ import { existingManual } from '#server/features/manuals/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { SignedIn } from '#server/http/session.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { findQuantity, quantityReply, quantityRows } from './queries.ts';
+import { channelTablesOfManual, findQuantity, quantityReply, quantityRows } from './queries.ts';
 
 type Who = Pick<SignedIn, 'id' | 'name'>;
 
@@ -19,7 +19,7 @@ export function programOf(db: Connection, manualId: string): Program {
   existingManual(db, manualId);
   return compile(
     quantityRows(db, manualId).map(({ definition }) => definition),
-    builtInTables,
+    [...builtInTables, ...channelTablesOfManual(db, manualId)],
   );
 }
 

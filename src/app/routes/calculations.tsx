@@ -3,6 +3,7 @@ import { Link, useParams, useSearchParams } from 'react-router';
 import { oneManual } from '#src/api/manuals.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { ChangeSheetView } from '#src/features/calculations/change-sheet.tsx';
+import { ChannelTables } from '#src/features/calculations/channel-tables.tsx';
 import { Dependencies } from '#src/features/calculations/dependencies.tsx';
 import { ProofView } from '#src/features/calculations/proof-view.tsx';
 import { ValuesSheet } from '#src/features/manual/values-sheet.tsx';
@@ -14,7 +15,7 @@ import { Screen } from '#src/ui/screen.tsx';
 import { Tabs, TabSheet } from '#src/ui/tabs.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
 
-const views = ['values', 'changes', 'dependencies', 'proof'] as const;
+const views = ['values', 'changes', 'dependencies', 'proof', 'tables'] as const;
 type View = (typeof views)[number];
 const viewIn = (asked: string | null): View => views.find((view) => view === asked) ?? 'values';
 
@@ -59,6 +60,7 @@ export function Component() {
             { value: 'changes', label: 'Change sheet' },
             { value: 'dependencies', label: 'Dependencies' },
             { value: 'proof', label: 'Proof' },
+            { value: 'tables', label: 'Channel tables' },
           ]}
         >
           <TabSheet value="values">
@@ -72,6 +74,9 @@ export function Component() {
           </TabSheet>
           <TabSheet value="proof">
             <ProofView />
+          </TabSheet>
+          <TabSheet value="tables">
+            <ChannelTables manualId={manual.id} />
           </TabSheet>
         </Tabs>
       </Screen>

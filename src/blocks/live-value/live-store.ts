@@ -5,6 +5,7 @@ import { type EvaluateOptions, type Evaluation, evaluate, type InputValues } fro
 import { createSession } from '#shared/calc/live-session.ts';
 import { type Program, compile } from '#shared/calc/program.ts';
 import { type Proof, proof } from '#shared/calc/proof.ts';
+import type { LookupTable } from '#shared/calc/tables.ts';
 
 /** The quantities of one manual at a setting that is being changed. What is read stays the same object until it changes. */
 export type LiveStore = {
@@ -29,12 +30,14 @@ export type LiveStore = {
 type Given = {
   manualId: string;
   quantities: readonly Quantity[];
+  /** The manual's own channel tables, besides the published ones. */
+  tables?: readonly LookupTable[];
   inputs: InputValues;
   onChange: (inputs: InputValues) => void;
 };
 
-export function createLiveStore({ manualId, quantities, inputs, onChange }: Given): LiveStore {
-  const program = compile(quantities, builtInTables);
+export function createLiveStore({ manualId, quantities, tables = [], inputs, onChange }: Given): LiveStore {
+  const program = compile(quantities, [...builtInTables, ...tables]);
   const byId = new Map(quantities.map((each) => [each.id, each]));
   const isInput = (symbol: string): boolean =>
     quantities.some((each) => each.symbol === symbol && each.kind === 'input');

@@ -47,8 +47,7 @@ export function NewQuantityForm({ store, manualId, pageId, found, onMade }: Prop
   const taken = store.quantities.some(({ symbol }) => symbol === draft.symbol)
     ? 'Taken by another quantity of this manual.'
     : undefined;
-  const trial: Trial =
-    checked.success && taken === undefined ? tryQuantity(store.quantities, input) : { state: 'incomplete' };
+  const trial: Trial = checked.success && taken === undefined ? tryQuantity(store, input) : { state: 'incomplete' };
   const onSubmit = (event: FormEvent): void => {
     event.preventDefault();
     if (checked.success) add.mutate(input, { onSuccess: onMade });

@@ -1,6 +1,5 @@
 import type { Quantity } from '#shared/api/quantities.ts';
 import type { QuantityDefinition } from '#shared/calc/quantity.ts';
-import { builtInTables } from '#shared/calc/channel-plans.ts';
 import { evaluate } from '#shared/calc/evaluate.ts';
 import { compile } from '#shared/calc/program.ts';
 import { proof } from '#shared/calc/proof.ts';
@@ -72,9 +71,13 @@ export type Trial =
   | { state: 'problem'; message: string; start?: number; end?: number }
   | { state: 'comes-out'; text: string; agrees: boolean };
 
-export function tryQuantity(quantities: readonly Quantity[], definition: QuantityDefinition): Trial {
+/** `tables` are those that the manual's formulas may look into. */
+export function tryQuantity(
+  { quantities, program: { tables } }: Pick<LiveStore, 'quantities' | 'program'>,
+  definition: QuantityDefinition,
+): Trial {
   if (definition.kind === 'derived' && (definition.expression ?? '').trim() === '') return { state: 'incomplete' };
-  const program = compile([...quantities, definition], builtInTables);
+  const program = compile([...quantities, definition], tables);
   const value = evaluate(program).values[definition.symbol];
   if (value === undefined) return { state: 'incomplete' };
   if (value.problem !== undefined) return { state: 'problem', ...value.problem };
