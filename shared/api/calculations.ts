@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { id, listOf, manualParams } from './common.ts';
+import { frequencyPlan } from '#shared/plan/plan.ts';
+import { id, listOf, manualParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 import { inputs } from './quantities.ts';
 
@@ -57,4 +58,31 @@ export const listChannelTables = defineEndpoint({
   action: 'read-manuals',
   params: manualParams,
   reply: listOf(channelTable),
+});
+
+/** `number` counts the changes; 0 and an empty plan where nobody has drawn one yet. */
+export const storedPlan = z.object({
+  number: z.number().int().nonnegative(),
+  plan: frequencyPlan,
+  savedAt: time.nullable(),
+  savedBy: z.string().nullable(),
+});
+
+export const getFrequencyPlan = defineEndpoint({
+  method: 'get',
+  path: '/api/manuals/:manualId/frequency-plan',
+  summary: 'The signal chain of the equipment: stages that feed each other',
+  action: 'read-manuals',
+  params: manualParams,
+  reply: storedPlan,
+});
+
+export const saveFrequencyPlan = defineEndpoint({
+  method: 'put',
+  path: '/api/manuals/:manualId/frequency-plan',
+  summary: 'Save the frequency plan; 409 with the present one if based on an older',
+  action: 'edit-quantities',
+  params: manualParams,
+  body: z.object({ baseNumber: z.number().int().nonnegative(), plan: frequencyPlan }),
+  reply: storedPlan,
 });

@@ -12,6 +12,7 @@ import { type ApiRouter, serve } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { findSetting, quantityReply, quantityRows, settingRows } from './queries.ts';
 import { calculationSheetRoutes } from './calculations.ts';
+import { planRoutes } from './plan.ts';
 import { createQuantity, deleteQuantity, programOf, updateQuantity } from './service.ts';
 
 export function valueRoutes(router: ApiRouter, tools: Tools): void {
@@ -38,6 +39,7 @@ export function valueRoutes(router: ApiRouter, tools: Tools): void {
   });
   calculationRoutes(router, tools);
   calculationSheetRoutes(router, tools);
+  planRoutes(router, tools);
   settingRoutes(router, tools);
 }
 
