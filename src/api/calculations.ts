@@ -1,5 +1,6 @@
-import { mutationOptions, queryOptions } from '@tanstack/react-query';
+import { mutationOptions, type QueryClient, queryOptions } from '@tanstack/react-query';
 import * as api from '#shared/api/calculations.ts';
+import type { FrequencyPlan } from '#shared/plan/plan.ts';
 import { addressOf, call } from './call.ts';
 import type { Inputs } from './quantities.ts';
 import { quantityKeys } from './quantity-keys.ts';
@@ -8,6 +9,19 @@ export const channelTablesOfManual = (manualId: string) =>
   queryOptions({
     queryKey: [...quantityKeys.ofManual(manualId), 'channel-tables'],
     queryFn: ({ signal }) => call(api.listChannelTables, { params: { manualId }, signal }).then(({ items }) => items),
+  });
+
+export const planOfManual = (manualId: string) =>
+  queryOptions({
+    queryKey: [...quantityKeys.ofManual(manualId), 'frequency-plan'],
+    queryFn: ({ signal }) => call(api.getFrequencyPlan, { params: { manualId }, signal }),
+  });
+
+export const savePlan = (client: QueryClient, manualId: string) =>
+  mutationOptions({
+    mutationFn: (body: { baseNumber: number; plan: FrequencyPlan }) =>
+      call(api.saveFrequencyPlan, { params: { manualId }, body }),
+    onSettled: () => client.invalidateQueries({ queryKey: quantityKeys.ofManual(manualId) }),
   });
 
 type Between = { before: Inputs; after: Inputs };

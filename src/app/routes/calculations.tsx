@@ -5,6 +5,7 @@ import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { ChangeSheetView } from '#src/features/calculations/change-sheet.tsx';
 import { ChannelTables } from '#src/features/calculations/channel-tables.tsx';
 import { Dependencies } from '#src/features/calculations/dependencies.tsx';
+import { PlanView } from '#src/features/calculations/plan-view.tsx';
 import { ProofView } from '#src/features/calculations/proof-view.tsx';
 import { ValuesSheet } from '#src/features/manual/values-sheet.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
@@ -15,7 +16,7 @@ import { Screen } from '#src/ui/screen.tsx';
 import { Tabs, TabSheet } from '#src/ui/tabs.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
 
-const views = ['values', 'changes', 'dependencies', 'proof', 'tables'] as const;
+const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'tables'] as const;
 type View = (typeof views)[number];
 const viewIn = (asked: string | null): View => views.find((view) => view === asked) ?? 'values';
 
@@ -58,6 +59,7 @@ export function Component() {
           tabs={[
             { value: 'values', label: 'Values' },
             { value: 'changes', label: 'Change sheet' },
+            { value: 'plan', label: 'Frequency plan' },
             { value: 'dependencies', label: 'Dependencies' },
             { value: 'proof', label: 'Proof' },
             { value: 'tables', label: 'Channel tables' },
@@ -68,6 +70,9 @@ export function Component() {
           </TabSheet>
           <TabSheet value="changes">
             <ChangeSheetView manualId={manual.id} />
+          </TabSheet>
+          <TabSheet value="plan">
+            <PlanView manualId={manual.id} />
           </TabSheet>
           <TabSheet value="dependencies">
             <Dependencies />

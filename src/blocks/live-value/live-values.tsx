@@ -3,7 +3,7 @@ import { createContext, type ReactNode, useContext, useMemo, useState, useSyncEx
 import type { Quantity } from '#shared/api/quantities.ts';
 import type { LiveValue } from '#shared/calc/describe-value.ts';
 import type { InputValues } from '#shared/calc/evaluate.ts';
-import { channelTablesOfManual } from '#src/api/calculations.ts';
+import { channelTablesOfManual, planOfManual } from '#src/api/calculations.ts';
 import { quantitiesOfManual } from '#src/api/quantities.ts';
 import { useStored } from '#src/lib/use-stored.ts';
 import { createLiveStore, type LiveStore } from './live-store.ts';
@@ -20,19 +20,21 @@ const SharedValues = createContext<Shared>({ store: null, view: 'both', setView:
 export function LiveValues({ manualId, children }: { manualId: string; children: ReactNode }) {
   const { data } = useQuery(quantitiesOfManual(manualId));
   const { data: tables } = useQuery(channelTablesOfManual(manualId));
+  const { data: stored } = useQuery(planOfManual(manualId));
   const [view, setView] = useStored('benchleaf.values', valueViews, 'both');
   useState(() => takeFromAddress(manualId));
   const store = useMemo(() => {
-    if (data === undefined || tables === undefined) return null;
+    if (data === undefined || tables === undefined || stored === undefined) return null;
     const inputs = readSetting(manualId);
     return createLiveStore({
       manualId,
       quantities: data,
       tables,
+      plan: stored.plan,
       inputs,
       onChange: (setting) => writeSetting(manualId, setting),
     });
-  }, [manualId, data, tables]);
+  }, [manualId, data, tables, stored]);
   const shared = useMemo(() => ({ store, view, setView }), [store, view, setView]);
   return <SharedValues.Provider value={shared}>{children}</SharedValues.Provider>;
 }
