@@ -16,7 +16,7 @@ type Props = {
 };
 
 /** Boxes in layers from left to right, joined by lines; in the order of the layers for whoever goes through by keyboard. */
-export function Graph({ label, layout: { nodes, edges, layers, rows }, chosen, children }: Props) {
+export function Graph({ label, layout: { nodes, lines, layers, rows }, chosen, children }: Props) {
   const placeOf = new Map(nodes.map((node) => [node.symbol, node]));
   const [width, height] = [leftOf(layers) - box.across, topOf(rows) - box.down];
   return (
@@ -24,17 +24,15 @@ export function Graph({ label, layout: { nodes, edges, layers, rows }, chosen, c
     <div role="region" aria-label={label} tabIndex={0} className="graph-frame">
       <div className="relative" style={{ width, height }}>
         <svg aria-hidden="true" width={width} height={height} className="graph-lines">
-          {edges.map(({ from, to }) => {
-            const [a, b] = [placeOf.get(from), placeOf.get(to)];
-            if (a === undefined || b === undefined) return null;
-            const start = [leftOf(a.layer) + box.width, topOf(a.row) + box.height / 2] as const;
-            const end = [leftOf(b.layer), topOf(b.row) + box.height / 2] as const;
-            const bend = Math.max(box.across, end[0] - start[0]) / 2;
+          {lines.map((line) => {
+            const [from, to] = [placeOf.get(line.from), placeOf.get(line.to)];
+            if (from === undefined || to === undefined) return null;
+            const isLit = chosen === line.from || chosen === line.to;
             return (
               <path
-                key={`${from} ${to}`}
-                className={chosen === from || chosen === to ? 'is-lit' : undefined}
-                d={`M${start.join()} C${start[0] + bend},${start[1]} ${end[0] - bend},${end[1]} ${end.join()}`}
+                key={`${line.from} ${line.to}`}
+                className={isLit ? 'is-lit' : undefined}
+                d={pathThrough([from, ...line.through, to])}
               />
             );
           })}
@@ -55,4 +53,20 @@ export function Graph({ label, layout: { nodes, edges, layers, rows }, chosen, c
       </div>
     </div>
   );
+}
+
+/** From the right edge of the first box, straight through the places kept between, to the left edge of the last. */
+function pathThrough(places: readonly { layer: number; row: number }[]): string {
+  const bend = box.across / 2;
+  return places
+    .slice(1)
+    .map((place, at) => {
+      const before = places[at] ?? place;
+      const [x, y] = [leftOf(before.layer) + box.width, topOf(before.row) + box.height / 2];
+      const [nextX, nextY] = [leftOf(place.layer), topOf(place.row) + box.height / 2];
+      const isThrough = at < places.length - 2;
+      const start = at === 0 ? `M${x},${y}` : '';
+      return `${start} C${x + bend},${y} ${nextX - bend},${nextY} ${nextX},${nextY}${isThrough ? ` H${nextX + box.width}` : ''}`;
+    })
+    .join(' ');
 }

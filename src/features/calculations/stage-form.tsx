@@ -70,16 +70,22 @@ function Findings({ problems, findings }: Pick<Props, 'problems' | 'findings'>) 
     <ul className="mb-3 grid gap-1 text-small">
       {problems.map((problem) => (
         <li key={problem}>
-          <StateWord {...marks.alarm}>{problem}</StateWord>
+          <StateWord {...marks.alarm}>{withoutName(problem)}</StateWord>
         </li>
       ))}
       {findings.map(({ code, weight, message }) => (
         <li key={`${code} ${message}`}>
-          <StateWord {...marks[weight]}>{message}</StateWord>
+          <StateWord {...marks[weight]}>{withoutName(message)}</StateWord>
         </li>
       ))}
     </ul>
   );
+}
+
+/** The stage's own name ahead of the colon only repeats the heading. */
+function withoutName(message: string): string {
+  const says = message.replace(/^[A-Z][\w -]* "[^"]*":? /, '');
+  return says.charAt(0).toUpperCase() + says.slice(1);
 }
 
 type EditProps = { stage: Stage; onChange: (stage: Stage) => void };
