@@ -4,6 +4,7 @@ import { oneManual } from '#src/api/manuals.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { ChangeSheetView } from '#src/features/calculations/change-sheet.tsx';
 import { ChannelTables } from '#src/features/calculations/channel-tables.tsx';
+import { Crystals } from '#src/features/calculations/crystals.tsx';
 import { Dependencies } from '#src/features/calculations/dependencies.tsx';
 import { PlanView } from '#src/features/calculations/plan-view.tsx';
 import { ProofView } from '#src/features/calculations/proof-view.tsx';
@@ -16,7 +17,7 @@ import { Screen } from '#src/ui/screen.tsx';
 import { Tabs, TabSheet } from '#src/ui/tabs.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
 
-const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'tables'] as const;
+const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'crystals', 'tables'] as const;
 type View = (typeof views)[number];
 const viewIn = (asked: string | null): View => views.find((view) => view === asked) ?? 'values';
 
@@ -62,6 +63,7 @@ export function Component() {
             { value: 'plan', label: 'Frequency plan' },
             { value: 'dependencies', label: 'Dependencies' },
             { value: 'proof', label: 'Proof' },
+            { value: 'crystals', label: 'Crystals' },
             { value: 'tables', label: 'Channel tables' },
           ]}
         >
@@ -79,6 +81,9 @@ export function Component() {
           </TabSheet>
           <TabSheet value="proof">
             <ProofView />
+          </TabSheet>
+          <TabSheet value="crystals">
+            <Crystals />
           </TabSheet>
           <TabSheet value="tables">
             <ChannelTables manualId={manual.id} />

@@ -24,7 +24,10 @@ export function Dependencies() {
 }
 
 function Drawing({ store }: { store: LiveStore }) {
-  const { order, dependsOn } = store.program;
+  const { dependsOn } = store.program;
+  // The stages of the frequency plan have a drawing of their own.
+  const own = new Set(store.quantities.map(({ symbol }) => symbol));
+  const order = store.program.order.filter((symbol) => own.has(symbol));
   const isMany = order.length > mostAtOnce;
   const [chosen, setChosen] = useState<string | null>(isMany ? (order.at(-1) ?? null) : null);
   const layout = useMemo(
