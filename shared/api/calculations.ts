@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { frequencyPlan } from '#shared/plan/plan.ts';
-import { id, listOf, manualParams, time } from './common.ts';
+import { id, listOf, manualParams, ok, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
 import { inputs } from './quantities.ts';
 
@@ -85,4 +85,46 @@ export const saveFrequencyPlan = defineEndpoint({
   params: manualParams,
   body: z.object({ baseNumber: z.number().int().nonnegative(), plan: frequencyPlan }),
   reply: storedPlan,
+});
+
+const numberOfRelation = z.object({
+  id: z.string(),
+  text: z.string(),
+  unit: z.string(),
+  pageId: id,
+  pageLabel: z.string(),
+  label: z.string(),
+  symbol: z.string().nullable(),
+});
+
+/** A relation that the printed numbers suggest. `expression` is over the numbers' symbols, or their ids where they have none. */
+export const relationProposal = z.object({
+  target: z.string(),
+  expression: z.string(),
+  filled: z.string(),
+  says: z.string(),
+  /** Powers of ten against chance. */
+  score: z.number(),
+  numbers: z.array(numberOfRelation),
+  table: z.object({ holds: z.number().int(), rows: z.number().int(), failing: z.array(z.number().int()) }).nullable(),
+});
+export type RelationProposal = z.infer<typeof relationProposal>;
+
+export const findRelations = defineEndpoint({
+  method: 'post',
+  path: '/api/manuals/:manualId/relations',
+  summary: 'Look for relations among the printed numbers of a manual; those accepted or dismissed before are left out',
+  action: 'edit-quantities',
+  params: manualParams,
+  reply: z.object({ items: z.array(relationProposal), numbers: z.number().int() }),
+});
+
+export const judgeRelation = defineEndpoint({
+  method: 'post',
+  path: '/api/manuals/:manualId/relations/verdicts',
+  summary: 'Say that a proposed relation is accepted or dismissed: it is not proposed again',
+  action: 'edit-quantities',
+  params: manualParams,
+  body: z.object({ relation: z.string().min(1).max(1000), verdict: z.enum(['accepted', 'dismissed']) }),
+  reply: ok,
 });

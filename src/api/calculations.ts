@@ -1,5 +1,6 @@
 import { mutationOptions, type QueryClient, queryOptions } from '@tanstack/react-query';
 import * as api from '#shared/api/calculations.ts';
+import type { z } from 'zod';
 import type { FrequencyPlan } from '#shared/plan/plan.ts';
 import { addressOf, call } from './call.ts';
 import type { Inputs } from './quantities.ts';
@@ -43,5 +44,27 @@ export const changeSheetFile = (manualId: string) =>
       });
       if (!response.ok) throw new Error('The change sheet could not be written to a file. Try again.');
       return response.blob();
+    },
+  });
+
+/** Looking takes a moment, so it is done when asked for and kept. */
+export const relationsOf = (manualId: string) =>
+  queryOptions({
+    queryKey: ['relations', manualId],
+    queryFn: ({ signal }) => call(api.findRelations, { params: { manualId }, signal }),
+    enabled: false,
+    staleTime: Infinity,
+  });
+
+type Found = z.infer<typeof api.findRelations.reply>;
+
+export const judgeRelation = (client: QueryClient, manualId: string) =>
+  mutationOptions({
+    mutationFn: (body: { relation: string; verdict: 'accepted' | 'dismissed' }) =>
+      call(api.judgeRelation, { params: { manualId }, body }),
+    onSuccess: (_reply, { relation }) => {
+      client.setQueryData(relationsOf(manualId).queryKey, (found: Found | undefined) =>
+        found === undefined ? undefined : { ...found, items: found.items.filter(({ filled }) => filled !== relation) },
+      );
     },
   });

@@ -10,12 +10,14 @@ import { existingManual } from '#server/features/manuals/index.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
+import type { SideWorker } from '#server/jobs/side-worker.ts';
 import { findSetting, quantityReply, quantityRows, settingRows } from './queries.ts';
 import { calculationSheetRoutes } from './calculations.ts';
 import { planRoutes } from './plan.ts';
+import { relationRoutes } from './relations.ts';
 import { createQuantity, deleteQuantity, programOf, updateQuantity } from './service.ts';
 
-export function valueRoutes(router: ApiRouter, tools: Tools): void {
+export function valueRoutes(router: ApiRouter, tools: Tools & { sideWorker: SideWorker }): void {
   const { db } = tools;
   serve(router, api.listQuantities, ({ params, query }) => {
     existingManual(db, params.manualId);
@@ -40,6 +42,7 @@ export function valueRoutes(router: ApiRouter, tools: Tools): void {
   calculationRoutes(router, tools);
   calculationSheetRoutes(router, tools);
   planRoutes(router, tools);
+  relationRoutes(router, tools);
   settingRoutes(router, tools);
 }
 

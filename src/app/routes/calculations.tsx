@@ -7,6 +7,7 @@ import { ChannelTables } from '#src/features/calculations/channel-tables.tsx';
 import { Crystals } from '#src/features/calculations/crystals.tsx';
 import { Dependencies } from '#src/features/calculations/dependencies.tsx';
 import { PlanView } from '#src/features/calculations/plan-view.tsx';
+import { Proposals } from '#src/features/calculations/proposals.tsx';
 import { ProofView } from '#src/features/calculations/proof-view.tsx';
 import { ValuesSheet } from '#src/features/manual/values-sheet.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
@@ -17,7 +18,7 @@ import { Screen } from '#src/ui/screen.tsx';
 import { Tabs, TabSheet } from '#src/ui/tabs.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
 
-const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'crystals', 'tables'] as const;
+const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'proposals', 'crystals', 'tables'] as const;
 type View = (typeof views)[number];
 const viewIn = (asked: string | null): View => views.find((view) => view === asked) ?? 'values';
 
@@ -63,6 +64,7 @@ export function Component() {
             { value: 'plan', label: 'Frequency plan' },
             { value: 'dependencies', label: 'Dependencies' },
             { value: 'proof', label: 'Proof' },
+            { value: 'proposals', label: 'Relations' },
             { value: 'crystals', label: 'Crystals' },
             { value: 'tables', label: 'Channel tables' },
           ]}
@@ -81,6 +83,9 @@ export function Component() {
           </TabSheet>
           <TabSheet value="proof">
             <ProofView />
+          </TabSheet>
+          <TabSheet value="proposals">
+            <Proposals manualId={manual.id} />
           </TabSheet>
           <TabSheet value="crystals">
             <Crystals />

@@ -90,8 +90,8 @@ function Conclusion({ conclusion }: { conclusion: CrystalConclusion }) {
       {facts.length === 0 ? <p className="text-pencil">Nothing can be concluded yet.</p> : null}
       <dl>
         {facts.map(([label, value]) => (
-          <div key={label} className="value-line">
-            <dt>{label}</dt>
+          <div key={label} className="grid grid-cols-[9rem_minmax(0,1fr)] gap-x-3">
+            <dt className="text-pencil">{label}</dt>
             <dd className="figures">{value}</dd>
           </div>
         ))}
