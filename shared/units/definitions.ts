@@ -94,6 +94,9 @@ function fold(text: string): string {
 
 /** Finds a unit by any of its spellings. */
 export function findUnit(text: string): Result<UnitDefinition, UnitProblem> {
+  // A manual asks for the same few symbols thousands of times.
+  const asWritten = exactIndex.get(text);
+  if (asWritten !== undefined) return succeed(asWritten);
   const spelling = canonicalLetters(text.trim()).replace(/\/sec$/i, '/s');
   const exact = exactIndex.get(spelling);
   if (exact !== undefined) return succeed(exact);
