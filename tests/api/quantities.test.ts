@@ -191,3 +191,16 @@ describe('the frequency plan', () => {
     expect((await reader.put(at('frequency-plan'), { baseNumber: 1, plan: { stages } })).status).toBe(403);
   });
 });
+
+describe('relations among the printed numbers', () => {
+  it('are looked for by editors, and judged once', async () => {
+    const { status, body } = await editor.post(at('relations'));
+    // No page of this manual has been read, so no number is printed.
+    expect({ status, body }).toEqual({ status: 200, body: { items: [], numbers: 0 } });
+    const verdict = { relation: '145.9 mc = 156.6 mc - 10.7 mc', verdict: 'dismissed' };
+    expect((await editor.post(at('relations/verdicts'), verdict)).status).toBe(200);
+    expect((await editor.post(at('relations/verdicts'), { ...verdict, verdict: 'accepted' })).status).toBe(200);
+    expect((await editor.post(at('relations/verdicts'), { relation: '', verdict: 'perhaps' })).status).toBe(400);
+    expect((await (await server.as('technician')).post(at('relations'))).status).toBe(403);
+  });
+});
