@@ -76,6 +76,14 @@ export const evaluated = z.object({
   printed: z.string().optional(),
   low: z.number().optional(),
   high: z.number().optional(),
+  rss: z.object({ low: z.number(), high: z.number() }).optional(),
+  verdict: z
+    .object({
+      allowed: z.object({ low: z.number().optional(), high: z.number().optional() }),
+      worstCase: z.enum(['pass', 'fail']),
+      rss: z.enum(['pass', 'fail']),
+    })
+    .optional(),
   sensitivity: z.record(z.string(), z.object({ absolute: z.number(), ppm: z.number().nullable() })).optional(),
   dependsOn: z.array(z.string()),
   limitsBroken: z.boolean().optional(),

@@ -1,6 +1,7 @@
 import { isAbout } from '#shared/expressions/compile-expression.ts';
 import { fromBase } from '#shared/units/convert.ts';
 import { formatLikePrinted, formatQuantity } from '#shared/units/format-quantity.ts';
+import type { SpreadVerdict } from './judge-spread.ts';
 import type { CalcProblem } from './problem.ts';
 import type { Cell } from './program.ts';
 import type { QuantityDefinition } from './quantity.ts';
@@ -19,6 +20,10 @@ export type LiveValue = {
   /** Worst case of all tolerances together. */
   low?: number;
   high?: number;
+  /** Root sum square of all tolerances: where independent ones are likely to end together. */
+  rss?: { low: number; high: number };
+  /** Whether the spread stays within what the manual allows; only where it prints limits or a tolerance. */
+  verdict?: SpreadVerdict;
   sensitivity?: Record<string, Sensitivity>;
   /** What its expression names directly. */
   dependsOn: string[];

@@ -1,5 +1,6 @@
 import { fromBase } from '#shared/units/convert.ts';
 import { describeValue, type LiveValue } from './describe-value.ts';
+import { judgeSpread } from './judge-spread.ts';
 import type { CalcProblem } from './problem.ts';
 import type { Program } from './program.ts';
 import { solve, type Pin, type Solution } from './solve.ts';
@@ -11,7 +12,7 @@ export type InputValues = Record<string, number | string>;
 export type EvaluateOptions = {
   /** Hold a derived quantity at a value and solve for an input. */
   pin?: Pin | undefined;
-  /** Also give `low` and `high`. */
+  /** Also give `low` and `high`, `rss`, and a `verdict` where the manual prints limits or a tolerance. */
   tolerances?: boolean | undefined;
   /** Also give `sensitivity`. */
   sensitivities?: boolean | undefined;
@@ -58,9 +59,12 @@ function describeAll(state: CalcState, { tolerances, sensitivities }: EvaluateOp
     const cell = state.program.cells[slot];
     if (cell === undefined) continue;
     const sensed = sensitivity?.get(slot);
+    const reach = spread?.get(slot);
+    const verdict = reach === undefined ? undefined : judgeSpread(cell.definition, reach);
     values[symbol] = {
       ...describeValue(state, cell),
-      ...spread?.get(slot),
+      ...reach,
+      ...(verdict === undefined ? {} : { verdict }),
       ...(sensed === undefined ? {} : { sensitivity: sensed }),
     };
   }

@@ -1,7 +1,8 @@
+import { runPlan, planCode, type FlatPlan } from '#shared/expressions/flat-code.ts';
 import { describeValue, type LiveValue } from './describe-value.ts';
 import type { CalcProblem } from './problem.ts';
 import type { Program } from './program.ts';
-import { computeAll, computeSlot, createState, giveValue, type CalcState } from './state.ts';
+import { computeAll, createState, giveValue, settle, takeGiven, type CalcState } from './state.ts';
 
 /** A setting that is being changed: each change recomputes only what rests on it. */
 export type LiveSession = {
@@ -23,12 +24,12 @@ export function createSession(program: Program, inputs: Record<string, number | 
     set: (symbol, value) => {
       const problem = giveValue(state, symbol, value);
       if (problem !== undefined) return { changed: [], problem };
-      return { changed: recompute([program.slots.get(symbol) ?? -1]) };
+      return recompute([program.slots.get(symbol) ?? -1]);
     },
     reset: (symbol) => {
       const slots = symbol === undefined ? [...state.given.keys()] : [program.slots.get(symbol) ?? -1];
       slots.forEach((slot) => state.given.delete(slot));
-      return { changed: recompute(slots) };
+      return recompute(slots);
     },
     read: (symbol) => {
       const cell = program.cells[program.slots.get(symbol) ?? -1];
@@ -44,31 +45,55 @@ export function createSession(program: Program, inputs: Record<string, number | 
   };
 }
 
-/** One sweep along the order over a byte per quantity; a value that comes out the same stops there. */
-function createRecompute(state: CalcState): (slots: readonly number[]) => string[] {
-  const { program } = state;
-  const isDue = new Uint8Array(program.cells.length);
-  return (slots) => {
-    let [from, last] = [Infinity, -1];
-    const due = (slot: number): void => {
-      const position = program.positions[slot] ?? -1;
-      if (position < 0) return;
-      isDue[position] = 1;
-      from = Math.min(from, position);
-      last = Math.max(last, position);
-    };
-    slots.forEach(due);
-    const changed: string[] = [];
-    for (let position = from; position <= last; position += 1) {
-      if (isDue[position] !== 1) continue;
-      isDue[position] = 0;
-      const slot = program.orderedSlots[position] ?? -1;
-      if (!computeSlot(state, slot)) continue;
-      const cell = program.cells[slot];
-      if (cell === undefined) continue;
-      changed.push(cell.definition.symbol);
-      cell.dependants.forEach(due);
-    }
-    return changed;
+/** How many inputs' plans are kept: a person turns one or two knobs, and a plan may be as large as the program. */
+const plansKept = 8;
+
+/** Computes what rests on some inputs; what that is, is found once for each choice of inputs. */
+function createRecompute(state: CalcState): (slots: readonly number[]) => SessionChange {
+  const plans = new Map<string, Rest>();
+  return (inputs) => {
+    const key = inputs.join(' ');
+    const rest = plans.get(key) ?? restOn(state, inputs);
+    plans.delete(key);
+    plans.set(key, rest);
+    const oldest = plans.keys().next().value;
+    if (plans.size > plansKept && oldest !== undefined) plans.delete(oldest);
+    for (const slot of inputs) takeGiven(state, slot);
+    runPlan(rest.plan);
+    return changeOf(state.program, settle(state, rest.slots));
+  };
+}
+
+type Rest = { slots: Int32Array; plan: FlatPlan };
+
+/** The inputs and everything that depends on them, in order. */
+function restOn({ program, registers }: CalcState, inputs: readonly number[]): Rest {
+  const isReached = new Uint8Array(program.cells.length);
+  const waiting = inputs.filter((slot) => (program.positions[slot] ?? -1) >= 0);
+  const positions: number[] = [];
+  for (let slot = waiting.pop(); slot !== undefined; slot = waiting.pop()) {
+    const position = program.positions[slot] ?? -1;
+    if (isReached[slot] === 1 || position < 0) continue;
+    isReached[slot] = 1;
+    positions.push(position);
+    for (const dependant of program.cells[slot]?.dependants ?? []) waiting.push(dependant);
+  }
+  const slots = Int32Array.from(positions)
+    .sort()
+    .map((position) => program.orderedSlots[position] ?? 0);
+  return { slots, plan: planCode(program.flat, registers, slots) };
+}
+
+/** The names are only looked up where somebody asks for them. */
+function changeOf({ symbols }: Program, slots: Int32Array): SessionChange {
+  let changed: string[] | undefined;
+  return {
+    get changed() {
+      if (changed === undefined) {
+        changed = [];
+        for (let at = 0; at < slots.length; at += 1) changed.push(symbols[slots[at] ?? 0] ?? '');
+      }
+      return changed;
+    },
   };
 }

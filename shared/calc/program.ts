@@ -1,5 +1,7 @@
 import { compileDerivative, type CompiledDerivative } from '#shared/expressions/compile-derivative.ts';
 import { compileExpression, type Compiled } from '#shared/expressions/compile-expression.ts';
+import { placeCode, type FlatCode } from '#shared/expressions/flat-code.ts';
+import { lowerExpression, startCode } from '#shared/expressions/lower-expression.ts';
 import type { ExpressionScope } from '#shared/expressions/scope.ts';
 import type { Expression } from '#shared/expressions/tree.ts';
 import type { UnitDefinition } from '#shared/units/definitions.ts';
@@ -30,11 +32,15 @@ export type Program = {
   slots: ReadonlyMap<string, number>;
   scope: ExpressionScope;
   tables: readonly LookupTable[];
+  /** The symbol of each slot. */
+  symbols: readonly string[];
   /** Symbols in an order in which each comes after all it depends on. Rings, and what depends on them, are left out. */
   order: readonly string[];
   orderedSlots: Int32Array;
   /** Place of each slot in `orderedSlots`, -1 for those left out. */
   positions: Int32Array;
+  /** All formulas as one list of operations over one array of numbers. */
+  flat: FlatCode;
   /** What each quantity's expression names directly, in order of appearance. */
   dependsOn: ReadonlyMap<string, readonly string[]>;
   problems: readonly CalcProblem[];
@@ -56,12 +62,23 @@ export function compile(definitions: readonly QuantityDefinition[], tables: read
     slots,
     scope,
     tables,
+    symbols: cells.map(({ definition }) => definition.symbol),
     order: order.map(symbolOf),
     orderedSlots: Int32Array.from(order),
     positions,
+    flat: flatten(cells, order, scope),
     dependsOn: new Map([...slots].map(([symbol, slot]) => [symbol, (cells[slot]?.dependsOn ?? []).map(symbolOf)])),
     problems: [...tableProblems, ...cells.flatMap(({ problem, homeProblem }) => problem ?? homeProblem ?? [])],
   };
+}
+
+function flatten(cells: readonly Cell[], order: readonly number[], scope: ExpressionScope): FlatCode {
+  const code = startCode(cells.length);
+  for (const slot of order) {
+    const formula = cells[slot]?.formula;
+    if (formula !== undefined) lowerExpression(formula.expression, { code, scope, owner: slot });
+  }
+  return placeCode(code);
 }
 
 function scopeOver(
@@ -107,12 +124,13 @@ function finishCells(prepared: readonly Prepared[], rings: readonly number[][], 
   });
 }
 
-/** Derivatives are compiled when first asked for: most sessions never do. */
+/** For solving and slopes; compiled when first asked for, because most sessions never do. Settings are computed by the flat code. */
 function formulaOf(expression: Expression, scope: ExpressionScope): NonNullable<Cell['formula']> {
+  let compiled: Compiled | undefined;
   let derivative: CompiledDerivative | undefined;
   return {
     expression,
-    compute: compileExpression(expression, scope),
+    compute: (slots) => (compiled ??= compileExpression(expression, scope))(slots),
     derivative: () => (derivative ??= compileDerivative(expression, scope)),
   };
 }

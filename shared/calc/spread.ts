@@ -23,40 +23,54 @@ function slopesFrom({ program, slots }: CalcState, source: number): { reached: n
   return { reached, slopes };
 }
 
+export type Bounds = { low: number; high: number };
+/** Worst case, and root sum square: what independent deviations come to, taken together. */
+export type Spread = Bounds & { rss: Bounds };
+
 /**
  * Lowest and highest value of each slot that a tolerance reaches, in its own unit: worst case, all deviations adding up,
  * each carried along the slope at the present setting. First order, which is what tolerances of a few per cent ask for.
+ * Beside it the root of the sum of squares, for deviations that have nothing to do with each other (JCGM 100:2008, 5.1.2; from memory).
  */
-export function spreadOf(state: CalcState): Map<number, { low: number; high: number }> {
+export function spreadOf(state: CalcState): Map<number, Spread> {
   const { program, slots } = state;
-  const deviations = new Map<number, Deviation>();
+  const deviations = new Map<number, Sum>();
   for (const cell of program.cells) {
     const own = deviationOf(cell, slots[cell.slot] ?? NaN);
     if (own !== undefined) addDeviations(deviations, own, slopesFrom(state, cell.slot));
   }
-  const spread = new Map<number, { low: number; high: number }>();
-  for (const [slot, { plus, minus }] of deviations) {
+  const spread = new Map<number, Spread>();
+  for (const [slot, { plus, minus, plusSquares, minusSquares }] of deviations) {
     const [cell, value = NaN] = [program.cells[slot], slots[slot]];
     // An infinite slope (a root at zero) bounds nothing; no bounds are better than wrong ones.
     if (cell === undefined || !Number.isFinite(plus + minus)) continue;
-    spread.set(slot, { low: fromBase(value - minus, cell.unit), high: fromBase(value + plus, cell.unit) });
+    const around = (up: number, down: number): Bounds => ({
+      low: fromBase(value - down, cell.unit),
+      high: fromBase(value + up, cell.unit),
+    });
+    spread.set(slot, { ...around(plus, minus), rss: around(Math.sqrt(plusSquares), Math.sqrt(minusSquares)) });
   }
   return spread;
 }
 
 type Deviation = { plus: number; minus: number };
+type Sum = Deviation & { plusSquares: number; minusSquares: number };
 
 /** Down a falling slope, the plus side of the source is the minus side of what it moves. */
 function addDeviations(
-  deviations: Map<number, Deviation>,
+  deviations: Map<number, Sum>,
   own: Deviation,
   { reached, slopes }: ReturnType<typeof slopesFrom>,
 ): void {
   for (const slot of reached) {
     const slope = slopes[slot] ?? 0;
-    const sum = deviations.get(slot) ?? { plus: 0, minus: 0 };
-    sum.plus += slope >= 0 ? slope * own.plus : -slope * own.minus;
-    sum.minus += slope >= 0 ? slope * own.minus : -slope * own.plus;
+    const sum = deviations.get(slot) ?? { plus: 0, minus: 0, plusSquares: 0, minusSquares: 0 };
+    const up = slope >= 0 ? slope * own.plus : -slope * own.minus;
+    const down = slope >= 0 ? slope * own.minus : -slope * own.plus;
+    sum.plus += up;
+    sum.minus += down;
+    sum.plusSquares += up * up;
+    sum.minusSquares += down * down;
     deviations.set(slot, sum);
   }
 }

@@ -1,4 +1,5 @@
 import { explainFailure } from '#shared/expressions/explain-failure.ts';
+import { planCode, runPlan } from '#shared/expressions/flat-code.ts';
 import type { CalcProblem } from './problem.ts';
 import type { Cell, Program } from './program.ts';
 import { readValue } from './read-value.ts';
@@ -6,17 +7,27 @@ import { readValue } from './read-value.ts';
 /** The numbers of one setting: base units in slots, NaN exactly where `problems` says why. */
 export type CalcState = {
   program: Program;
+  /** The quantities' part of `registers`, in which the flat code computes. */
   slots: Float64Array;
+  registers: Float64Array;
+  /** The slots as they were when last settled: what differs has changed. */
+  shown: Float64Array;
+  /** For collecting what changed without asking for memory each time. */
+  scratch: Int32Array;
   problems: Map<number, CalcProblem>;
   /** What was set for an input, in base units or as the problem of what was set; home where nothing was. */
   given: Map<number, number | CalcProblem>;
 };
 
-/** Everything at home, computed in full. */
+/** Everything at home, not yet computed. */
 export function createState(program: Program): CalcState {
+  const registers = program.flat.initial.slice();
   const state: CalcState = {
     program,
-    slots: new Float64Array(program.cells.length).fill(NaN),
+    registers,
+    slots: registers.subarray(0, program.cells.length),
+    shown: new Float64Array(program.cells.length).fill(NaN),
+    scratch: new Int32Array(program.cells.length),
     problems: new Map(),
     given: new Map(),
   };
@@ -28,7 +39,17 @@ export function createState(program: Program): CalcState {
 }
 
 export function computeAll(state: CalcState): void {
-  for (const slot of state.program.orderedSlots) computeSlot(state, slot);
+  for (const cell of state.program.cells) if (cell.formula === undefined) takeGiven(state, cell.slot);
+  runPlan(planCode(state.program.flat, state.registers));
+  settle(state, state.program.orderedSlots);
+}
+
+/** Puts what is given for an input or constant into its slot; what rests on it is still to be computed. */
+export function takeGiven(state: CalcState, slot: number): void {
+  const cell = state.program.cells[slot];
+  if (cell === undefined || (state.program.positions[slot] ?? -1) < 0) return;
+  const given = cell.problem ?? givenOf(state, cell);
+  state.slots[slot] = typeof given === 'number' ? given : NaN;
 }
 
 /** Notes what an input is set to; the caller recomputes. Returns a problem where the symbol is no input at all. */
@@ -48,46 +69,66 @@ export function giveValue(state: CalcState, symbol: string, value: number | stri
   return undefined;
 }
 
-/** Computes one slot from those before it. True where the value, or the reason for having none, is another than before. */
-export function computeSlot(state: CalcState, slot: number): boolean {
-  const cell = state.program.cells[slot];
-  if (cell === undefined) return false;
-  const outcome = outcomeOf(state, cell);
-  const before = state.slots[slot] ?? NaN;
-  if (typeof outcome === 'number') {
-    state.slots[slot] = outcome;
-    return !Object.is(before, outcome);
+/**
+ * After computing these slots, given in their order: finds the reasons of those that came out without a value.
+ * Returns the slots whose value, or reason for having none, is another than before.
+ */
+export function settle(state: CalcState, computed: Int32Array): Int32Array {
+  const { slots, shown, problems, scratch } = state;
+  let [count, missing] = [0, 0];
+  for (let at = 0; at < computed.length; at += 1) {
+    const slot = computed[at] ?? 0;
+    const now = slots[slot] ?? NaN;
+    const was = shown[slot] ?? NaN;
+    if (now === was) continue;
+    if (Number.isNaN(now)) {
+      missing += 1;
+      if (Number.isNaN(was)) continue;
+    }
+    shown[slot] = now;
+    scratch[count] = slot;
+    count += 1;
   }
-  const problem = state.problems.get(slot);
-  state.slots[slot] = NaN;
-  state.problems.set(slot, outcome);
-  return problem === undefined || problem.message !== outcome.message;
+  const hasNoProblem = missing === 0 && problems.size === 0;
+  if (hasNoProblem) return count === computed.length ? computed : scratch.slice(0, count);
+  const others = explainMissing(state, computed);
+  const { positions } = state.program;
+  return Int32Array.from([...scratch.subarray(0, count), ...others]).sort(
+    (a, b) => (positions[a] ?? 0) - (positions[b] ?? 0),
+  );
 }
 
-function outcomeOf(state: CalcState, cell: Cell): number | CalcProblem {
+/** Reasons for what has no value, in the order of computing. Returns the slots where only the reason is another. */
+function explainMissing(state: CalcState, computed: Int32Array): number[] {
+  const { problems, program, slots } = state;
+  const otherReason: number[] = [];
+  for (const slot of computed) {
+    const cell = program.cells[slot];
+    if (cell === undefined) continue;
+    if (!Number.isNaN(slots[slot])) {
+      problems.delete(slot);
+      continue;
+    }
+    const [was, is] = [problems.get(slot), problemOf(state, cell)];
+    problems.set(slot, is);
+    if (was !== undefined && was.message !== is.message) otherReason.push(slot);
+  }
+  return otherReason;
+}
+
+function problemOf(state: CalcState, cell: Cell): CalcProblem {
   if (cell.problem !== undefined) return cell.problem;
-  const outcome = cell.formula === undefined ? givenOf(state, cell) : derivedOf(state, cell);
-  if (typeof outcome === 'number' && state.problems.size > 0) state.problems.delete(cell.slot);
-  return outcome;
+  if (cell.formula === undefined) {
+    const given = givenOf(state, cell);
+    return typeof given === 'number' ? failureOf(state, cell) : given;
+  }
+  for (const on of cell.dependsOn) if (Number.isNaN(state.slots[on])) return behind(state, cell, on);
+  return failureOf(state, cell);
 }
 
 function givenOf({ given }: CalcState, { slot, home, homeProblem, definition }: Cell): number | CalcProblem {
-  const missing: CalcProblem = {
-    code: 'missing-home',
-    symbol: definition.symbol,
-    message: `${definition.symbol} has no value.`,
-  };
-  return given.get(slot) ?? home ?? homeProblem ?? missing;
-}
-
-function derivedOf(state: CalcState, cell: Cell): number | CalcProblem {
-  const { slots } = state;
-  // A conditional might not look at a missing value; downstream of a problem nothing may show a number all the same.
-  for (const on of cell.dependsOn) if (Number.isNaN(slots[on])) return behind(state, cell, on);
-  const value = cell.formula?.compute(slots) ?? NaN;
-  // -0 would be another value than 0 to Object.is, and no other to a reader.
-  if (Number.isFinite(value)) return value === 0 ? 0 : value;
-  return failureOf(state, cell);
+  const { symbol } = definition;
+  return given.get(slot) ?? home ?? homeProblem ?? { code: 'missing-home', symbol, message: `${symbol} has no value.` };
 }
 
 function failureOf({ program, slots }: CalcState, { definition, formula }: Cell): CalcProblem {

@@ -1,12 +1,13 @@
 import type { DocNode, Mark } from '#shared/document/define-block.ts';
 import type { DoubtMark } from '#shared/document/marks.ts';
 import type { ReadingWord } from './reading.ts';
+import { trustIn } from './trust.ts';
 
 /** Below this confidence a word is shown as a doubt: in trials nine in ten wrong words lay under it. */
 export const doubtBelow = 75;
 
 const markOf = (word: ReadingWord): Mark[] => {
-  const place: Mark = { type: 'word', attrs: { zone: word.box, confidence: Math.round(word.confidence) } };
+  const place: Mark = { type: 'word', attrs: { zone: word.box, confidence: Math.round(trustIn(word)) } };
   const reason = doubtReason(word);
   if (reason === null) return [place];
   const doubt: DoubtMark = { reason, proposals: word.raw === word.text ? [] : [word.raw] };
@@ -15,7 +16,7 @@ const markOf = (word: ReadingWord): Mark[] => {
 
 function doubtReason(word: ReadingWord): DoubtMark['reason'] | null {
   if (word.raw !== word.text && word.sure !== true) return 'sign-guessed';
-  if (word.confidence < doubtBelow) return 'low-confidence';
+  if (trustIn(word) < doubtBelow) return 'low-confidence';
   return /\d[:;]\d|\d[.,]{2}\d|\d,\d{1,2}$|\d,\d{4,}/.test(word.text) ? 'odd-number' : null;
 }
 

@@ -31,14 +31,17 @@ export const unitDefinitions: readonly UnitDefinition[] = [
   { symbol: 'F', dimension: 'capacitance', factor: '1', anyCase: ['farad', 'farads'] },
   { symbol: 'µF', dimension: 'capacitance', factor: '1e-6', anyCase: ['µf', 'uf', 'mfd', 'mfds', 'mf', 'ufd', 'µfd', 'microfarad', 'microfarads'] },
   { symbol: 'nF', dimension: 'capacitance', factor: '1e-9', anyCase: ['nf', 'nanofarad', 'nanofarads'] },
-  { symbol: 'pF', dimension: 'capacitance', factor: '1e-12', anyCase: ['pf', 'pfd', 'µµf', 'uuf', 'µµfd', 'uufd', 'mmf', 'mmfd', 'mmfds', 'picofarad', 'picofarads', 'micromicrofarad', 'micromicrofarads'] },
+  { symbol: 'pF', dimension: 'capacitance', factor: '1e-12', anyCase: ['pf', 'pfd', 'µµf', 'uuf', 'µµfd', 'uufd', 'mmf', 'mmfd', 'mmfds', 'picofarad', 'picofarads', 'micromicrofarad', 'micromicrofarads', 'micro-microfarad', 'micro-microfarads'] },
   { symbol: 'H', dimension: 'inductance', factor: '1', anyCase: ['hy', 'henry', 'henrys', 'henries'] },
   { symbol: 'mH', dimension: 'inductance', factor: '1e-3', anyCase: ['mh', 'mhy', 'millihenry', 'millihenrys', 'millihenries'] },
   { symbol: 'µH', dimension: 'inductance', factor: '1e-6', anyCase: ['µh', 'uh', 'µhy', 'uhy', 'microhenry', 'microhenrys', 'microhenries'] },
-  { symbol: 'nH', dimension: 'inductance', factor: '1e-9', anyCase: ['nh'] },
+  { symbol: 'nH', dimension: 'inductance', factor: '1e-9', anyCase: ['nh', 'nanohenry', 'nanohenrys', 'nanohenries'] },
+  { symbol: 'mΩ', dimension: 'resistance', factor: '1e-3', exact: ['mω'], anyCase: ['milliohm', 'milliohms'] },
   { symbol: 'Ω', dimension: 'resistance', factor: '1', anyCase: ['ω', 'ohm', 'ohms'] },
   { symbol: 'kΩ', dimension: 'resistance', factor: '1e3', anyCase: ['k', 'kω', 'kohm', 'kohms', 'kilohm', 'kilohms'] },
   { symbol: 'MΩ', dimension: 'resistance', factor: '1e6', anyCase: ['meg', 'megs', 'megohm', 'megohms'] },
+  { symbol: 'GΩ', dimension: 'resistance', factor: '1e9', anyCase: ['gohm', 'gohms', 'gigohm', 'gigohms'] },
+  { symbol: 'TΩ', dimension: 'resistance', factor: '1e12', anyCase: ['tohm', 'tohms'] },
   { symbol: 'S', dimension: 'conductance', factor: '1', anyCase: ['mho', 'mhos', 'siemens'] },
   { symbol: 'mS', dimension: 'conductance', factor: '1e-3', anyCase: ['mmho', 'mmhos', 'millimho', 'millimhos'] },
   { symbol: 'µS', dimension: 'conductance', factor: '1e-6', exact: ['uS'], anyCase: ['µmho', 'µmhos', 'umho', 'umhos', 'micromho', 'micromhos'] },
@@ -62,7 +65,15 @@ export const unitDefinitions: readonly UnitDefinition[] = [
   // International yard and pound agreement of 1959: one inch is 25.4 mm exactly.
   { symbol: 'in', dimension: 'length', factor: '0.0254', anyCase: ['in', 'in.', 'inch', 'inches'] },
   { symbol: '°C', dimension: 'temperature', factor: '1', anyCase: ['°c', 'degc', '℃'] },
+  // Of a kind of its own: it is read and printed, and never added to a temperature in °C. in-si.ts converts it.
+  { symbol: '°F', dimension: 'temperature in °F', factor: '1', anyCase: ['°f', 'degf', '℉'] },
+  // A field strength in volts per metre is a voltage over a length.
+  { symbol: 'V/m', dimension: 'field strength', factor: '1', anyCase: ['v/m', 'volt/m', 'volts/m'] },
+  { symbol: 'mV/m', dimension: 'field strength', factor: '1e-3', anyCase: ['mv/m'] },
+  { symbol: 'µV/m', dimension: 'field strength', factor: '1e-6', anyCase: ['µv/m', 'uv/m'] },
   { symbol: 'dB', dimension: 'level difference', factor: '1', anyCase: ['db'] },
+  // Against the carrier: a difference of two levels.
+  { symbol: 'dBc', dimension: 'level difference', factor: '1', anyCase: ['dbc'] },
   { symbol: 'dBm', dimension: 'power level', factor: '1', anyCase: ['dbm'] },
   { symbol: 'dBµV', dimension: 'voltage level', factor: '1', anyCase: ['dbµv', 'dbuv'] },
 ];
@@ -94,6 +105,9 @@ function fold(text: string): string {
 
 /** Finds a unit by any of its spellings. */
 export function findUnit(text: string): Result<UnitDefinition, UnitProblem> {
+  // A manual asks for the same few symbols thousands of times.
+  const asWritten = exactIndex.get(text);
+  if (asWritten !== undefined) return succeed(asWritten);
   const spelling = canonicalLetters(text.trim()).replace(/\/sec$/i, '/s');
   const exact = exactIndex.get(spelling);
   if (exact !== undefined) return succeed(exact);

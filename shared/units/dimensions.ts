@@ -1,8 +1,8 @@
 /**
- * A dimension is a list of exponents over the five SI base units that radio work needs and three tags for levels.
+ * A dimension is a list of exponents over the five SI base units that radio work needs and tags for levels and °F.
  * The tags keep a level in dBm from being added to another: only differences of levels are plain decibels.
  */
-const axes = ['m', 'kg', 's', 'A', 'K', 'dB', 'dBm', 'dBµV'] as const;
+const axes = ['m', 'kg', 's', 'A', 'K', 'dB', 'dBm', 'dBµV', '°F'] as const;
 type Axis = (typeof axes)[number];
 export type Dimension = readonly number[];
 
@@ -15,8 +15,10 @@ export const dimensions = {
   time: from({ s: 1 }),
   frequency: from({ s: -1 }),
   temperature: from({ K: 1 }),
+  'temperature in °F': from({ '°F': 1 }),
   current: from({ A: 1 }),
   voltage: from({ kg: 1, m: 2, s: -3, A: -1 }),
+  'field strength': from({ kg: 1, m: 1, s: -3, A: -1 }),
   power: from({ kg: 1, m: 2, s: -3 }),
   resistance: from({ kg: 1, m: 2, s: -3, A: -2 }),
   conductance: from({ kg: -1, m: -2, s: 3, A: 2 }),

@@ -5,9 +5,14 @@ import { fail, succeed, type Result } from '#shared/kit/result.ts';
 
 const numberPattern = /^(?:\d{1,3}(?:,\d{3})+(?!\d)|\d+)(?:\.\d*)?|^\.\d+/;
 const exponentPattern = /^[eE][+-]?\d+(?![A-Za-z0-9])/;
+/** `10 x 10^-6`, `2.5 × 10⁻³`. */
+const timesTenPattern =
+  /^\s*[xX\u00D7]\s*10\s*(?:\^\s*([-+\u2212]?\d{1,2})|([\u207A\u207B]?[\u2070\u00B9\u00B2\u00B3\u2074-\u2079]{1,2}))/;
+const raised = '\u2070\u00B9\u00B2\u00B3\u2074\u2075\u2076\u2077\u2078\u2079';
 const signPattern = /^[-\u2212\u2013+]\s*(?=[\d.])/;
 /** Letters (with the few signs that units use), and `/s` or `/sec` after them. */
-const unitPattern = /^(?:per\s+cent|[A-Za-z\u00B5\u03BC\u03A9\u03C9\u2126\u00B0\u2103]+(?:\/s(?:ec)?(?![A-Za-z]))?|%)/i;
+const unitPattern =
+  /^(?:per\s+cent|micro-micro[a-z]+|[A-Za-z\u00B5\u03BC\u03A9\u03C9\u2126\u00B0\u2103\u2109]+(?:\/(?:s(?:ec)?|m)(?![A-Za-z]))?|%)/i;
 
 export type NumberText = { decimalText: string; decimals: number; grouped: boolean; start: number; end: number };
 
@@ -16,7 +21,7 @@ export function readNumber(text: string, offset: number): NumberText | undefined
   const sign = signPattern.exec(text)?.[0] ?? '';
   const digits = numberPattern.exec(text.slice(sign.length))?.[0];
   if (digits === undefined) return undefined;
-  const exponent = exponentPattern.exec(text.slice(sign.length + digits.length))?.[0] ?? '';
+  const { exponent, length } = readExponent(text.slice(sign.length + digits.length));
   const plain = digits.replaceAll(',', '');
   const point = plain.indexOf('.');
   const negative = sign !== '' && !sign.startsWith('+');
@@ -25,8 +30,20 @@ export function readNumber(text: string, offset: number): NumberText | undefined
     decimals: Math.max(0, (point < 0 ? 0 : plain.length - point - 1) - Number(exponent.slice(1))),
     grouped: digits.includes(','),
     start: offset,
-    end: offset + sign.length + digits.length + exponent.length,
+    end: offset + sign.length + digits.length + length,
   };
+}
+
+/** As decimal text writes it (`e-6`), and how many characters of the print it takes. */
+function readExponent(text: string): { exponent: string; length: number } {
+  const short = exponentPattern.exec(text)?.[0];
+  if (short !== undefined) return { exponent: short, length: short.length };
+  const [whole = '', plain, small = ''] = timesTenPattern.exec(text) ?? [];
+  if (whole === '') return { exponent: '', length: 0 };
+  const spelled =
+    plain ??
+    [...small].map((each) => (each === '\u207B' ? '-' : raised.includes(each) ? raised.indexOf(each) : '')).join('');
+  return { exponent: `e${spelled.replace('\u2212', '-')}`, length: whole.length };
 }
 
 export type UnitText = { unit: UnitDefinition; text: string; length: number };

@@ -3,12 +3,14 @@ import { benchRecognition } from './recognition.ts';
 import { benchRecompute } from './recompute.ts';
 import { benchSearch } from './search.ts';
 import { benchSizes } from './sizes.ts';
+import { benchWorkers } from './workers.ts';
 
 /** Figures of speed and size, each beside a named reference measured in the same run: `npm run bench [-- name ... option=value ...]`. */
 const benches: Record<string, (args: readonly string[]) => Promise<string[]> | string[]> = {
   sizes: benchSizes,
   reading: benchReading,
   recognition: benchRecognition,
+  workers: benchWorkers,
   recompute: benchRecompute,
   search: benchSearch,
 };

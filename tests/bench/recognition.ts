@@ -13,6 +13,8 @@ import { textOf } from '#shared/document/text-of.ts';
 import type { Reading, Transform } from '#shared/reading/reading.ts';
 import { withoutSpecks } from '#shared/reading/specks.ts';
 import { documentOf } from '#shared/reading/structure.ts';
+import { trustIn } from '#shared/reading/trust.ts';
+import { type Judged, type TrueWord, confidenceLines, judged } from './confidence.ts';
 import { readRealPaper } from './real-paper.ts';
 import { type Tally, type TrueBlock, tallyStructure, tallyText } from './structure-score.ts';
 
@@ -72,7 +74,7 @@ function optionsFrom(args: readonly string[]): Options {
   return { ...defaults, ...Object.fromEntries(given.map(([name, ...rest]) => [name, rest.join('=')])) };
 }
 
-type Truth = { id: string; image: string; kind: string; dpi: number; blocks: TrueBlock[] };
+type Truth = { id: string; image: string; profile: string; dpi: number; words: TrueWord[]; blocks: TrueBlock[] };
 type Hypothesis = {
   text: string;
   words: { text: string; conf: number; box: number[]; line: number }[];
@@ -119,6 +121,9 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
   return [
     `${truths.length} pages, seed ${seed}, ${profiles}; ours: ${each(spent.ours)}`,
     ...scoresOf(pages, ours),
+    '',
+    ...confidenceLines(truths.flatMap((truth) => judgedPage(truth, ours))),
+    ...warningLines(truths, folder),
     `blocks found as what they are: ${tallyText(structure)}`,
     ...(engine === null
       ? []
@@ -128,6 +133,22 @@ async function readAll(folder: string, options: Options): Promise<string[]> {
           ...scoresOf(pages, plain),
         ]),
   ];
+}
+
+function judgedPage({ id, words }: Truth, ours: string): Judged[] {
+  const read = JSON.parse(readFileSync(path.join(ours, `${id}.json`), 'utf8')) as Hypothesis;
+  return judged(words, read.words);
+}
+
+/** How many pages of each quality came back with which warnings. */
+function warningLines(truths: readonly Truth[], folder: string): string[] {
+  const counts = new Map<string, number>();
+  for (const { id, profile } of truths) {
+    const { warnings = [] } = JSON.parse(readFileSync(path.join(folder, `${id}.reading.json`), 'utf8')) as Reading;
+    const kinds = warnings.length === 0 ? 'none' : warnings.map(({ kind }) => kind).join(' + ');
+    counts.set(`${profile}: ${kinds}`, (counts.get(`${profile}: ${kinds}`) ?? 0) + 1);
+  }
+  return [...counts].sort().map(([what, count]) => `warnings, ${what}: ${count} pages`);
 }
 
 async function warmUp(drawn: string, { folder, engine }: { folder: string; engine: Worker | null }): Promise<void> {
@@ -147,17 +168,17 @@ export function hypothesisOf(reading: Reading): Hypothesis {
   const document = documentOf(reading);
   return {
     text: textOf(document),
-    words: withoutSpecks(reading.words).map(({ text, confidence, box, line }) => ({
-      text,
-      conf: confidence,
-      box: delivered(box, reading.transform),
-      line,
+    words: withoutSpecks(reading.words).map((word) => ({
+      text: word.text,
+      conf: trustIn(word),
+      box: delivered(word.box, reading.transform),
+      line: word.line,
     })),
     tables: tablesOf(document).map(({ rows }) => ({ rows })),
   };
 }
 
-function delivered([x, y, w, h]: Zone, [[a, b, c], [d, e, f]]: Transform): number[] {
+export function delivered([x, y, w, h]: Zone, [[a, b, c], [d, e, f]]: Transform): number[] {
   const corners = [
     [x, y],
     [x + w, y],

@@ -42,11 +42,13 @@ const uprightAbove = 65;
 export async function readPage(input: ReadInput): Promise<Reading> {
   const { drawn, dpi, wish } = input;
   const reading = await readAsItLies(input);
-  if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove) return reading;
+  if (wish.turnDegrees !== undefined || reading.confidence >= uprightAbove || isBlank(reading)) return reading;
   const { turn: turnDegrees, isSure } = await uprightTurn(drawn, dpi);
   if (turnDegrees !== 0) return readAsItLies({ ...input, wish: { ...wish, turnDegrees } });
   return isSure ? reading : { ...reading, warnings: withTurnUnsure(reading) };
 }
+
+const isBlank = ({ warnings = [] }: Reading): boolean => warnings.some(({ kind }) => kind === 'nearly-blank');
 
 async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInput): Promise<Reading> {
   const prepared = await prepare(drawn, dpi, { target, wish });
@@ -54,9 +56,9 @@ async function readAsItLies({ drawn, dpi, target, wish, layer = null }: ReadInpu
   const looked = await secondLooks(prepared, await recognisedWords(prepared));
   const { quality } = prepared;
   const { figures } = looked;
-  const isBlank = figures.length === 0 && isNearlyBlank(quality, looked.words);
+  const hasNothing = figures.length === 0 && isNearlyBlank(quality, looked.words);
   const filed = layer === null ? null : textLayer.parse(JSON.parse(await readFile(layer, 'utf8')));
-  const read = isBlank ? surelyRead(looked.words) : looked.words;
+  const read = hasNothing ? surelyRead(looked.words) : looked.words;
   const { words, wordsFrom, warnings } = chooseWords(read, filed, { transform, wish: wish.wordsFrom });
   const confidence = meanConfidence(words);
   return {
