@@ -83,7 +83,7 @@ function parameterObjections(stage: Stage): Objection[] {
     if (text.trim() === '') objections.push(['missing-parameter', `has no ${word}. Write one, like ${example}.`]);
   };
   if ('frequency' in stage) {
-    need(stage.frequency, 'frequency', '16.2 MHz, or solve for it');
+    need(`${stage.frequency}${stage.printed ?? ''}`, 'frequency', '16.2 MHz, or solve for it');
     objections.push(...unitObjections(stage.frequency, 'frequency'));
     if ((stage.tolerance ?? '').trim() !== '' && toleranceOf(stage) === undefined)
       objections.push([
