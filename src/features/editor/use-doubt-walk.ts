@@ -57,8 +57,13 @@ export function useDoubtWalk(editor: Editor, showOnScan: (key: string) => void):
     },
     [editor],
   );
-  const settleAll = useCallback(
-    (doubts: readonly Doubt[], text: string | null) => {
+  const settleAll = useSettleAll(editor);
+  return { goBeside, goTo, settle, take, settleAll };
+}
+
+function useSettleAll(editor: Editor): DoubtWalk['settleAll'] {
+  return useCallback(
+    (doubts, text) => {
       const mark = editor.schema.marks['doubt'];
       if (mark === undefined) return;
       editor
@@ -75,5 +80,4 @@ export function useDoubtWalk(editor: Editor, showOnScan: (key: string) => void):
     },
     [editor],
   );
-  return { goBeside, goTo, settle, take, settleAll };
 }
