@@ -32,9 +32,27 @@ function listenersOf(valued: ValuedPlan, crystal: string): { stage: Stage; band:
     if (stage.kind !== 'input' && stage.kind !== 'mixer') return [];
     const hz = frequencyOf(valued, stage.id);
     if (!(hz > 0) || sourcesOf(valued, stage.id).every((id) => id === crystal)) return [];
-    const band = commonBand(valued, filtersAfter(valued, stage.id));
-    return [{ stage, band: band ?? { low: hz * (1 - nearShare), high: hz * (1 + nearShare) } }];
+    return [{ stage, band: stage.kind === 'input' ? heardAround(valued, stage, hz) : bandAfter(valued, stage, hz) }];
   });
+}
+
+function bandAfter(valued: ValuedPlan, stage: Stage, hz: number): Band {
+  return (
+    commonBand(valued, filtersAfter(valued, stage.id)) ?? { low: hz * (1 - nearShare), high: hz * (1 + nearShare) }
+  );
+}
+
+/** A filter ahead of the first mixer is far wider than what is heard: the IF behind that mixer decides. */
+function heardAround(valued: ValuedPlan, input: Stage, hz: number): Band {
+  const reached = new Set([input.id, ...filtersAfter(valued, input.id).map(({ id }) => id)]);
+  const mixers = valued.plan.stages.filter(({ kind, from }) => kind === 'mixer' && reached.has(from[0] ?? ''));
+  const widths = mixers.flatMap(({ id }) => {
+    const band = commonBand(valued, filtersAfter(valued, id));
+    const width = band === undefined ? Infinity : band.high - band.low;
+    return width > 0 && Number.isFinite(width) ? [width / 2] : [];
+  });
+  const reach = widths.length === 0 ? hz * nearShare : Math.max(...widths);
+  return { low: hz - reach, high: hz + reach };
 }
 
 /** Where all that reaches a stage begins. */

@@ -114,6 +114,24 @@ describe('what checking finds', () => {
     ]);
   });
 
+  it('no harmonic that the first filter lets in and the IF does not', () => {
+    const wide = { id: 'f', kind: 'filter', name: 'L1', from: ['rf'], limits: { low: '155 MHz', high: '163 MHz' } };
+    const narrow = (id: string, high: string) => ({
+      id,
+      kind: 'filter',
+      from: ['mix'],
+      limits: { low: '10.6 MHz', high },
+    });
+    const y9 = { id: 'y9', kind: 'crystal', frequency: '16.2 MHz' };
+    const heard = (high: string) =>
+      check(planOf(rf, wide, lo('145.9 MHz'), mix(['f', 'lo']), narrow('if1', high), y9)).filter(
+        ({ code, stage }) => code === 'crystal-harmonic' && stage === 'y9',
+      );
+    // 10 x 16.2 = 162 MHz: 5.4 MHz from the signal.
+    expect(heard('10.8 MHz')).toEqual([]);
+    expect(heard('22 MHz').map(({ hz }) => hz)).toContain(162_000_000);
+  });
+
   it('how often the sidebands turn', () => {
     const chain = (second: string) =>
       planOf(

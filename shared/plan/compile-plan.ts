@@ -47,6 +47,7 @@ export function compilePlan(
   return { definitions, problems: [...own, ...engine] };
 }
 
+type Sourced = Extract<Stage, { frequency: string }>;
 type Objection = [code: PlanProblem['code'], says: string];
 
 function objectionsTo(stage: Stage, plan: FrequencyPlan): PlanProblem[] {
@@ -82,15 +83,7 @@ function parameterObjections(stage: Stage): Objection[] {
   const need = (text: string, word: string, example: string): void => {
     if (text.trim() === '') objections.push(['missing-parameter', `has no ${word}. Write one, like ${example}.`]);
   };
-  if ('frequency' in stage) {
-    need(stage.frequency, 'frequency', '16.2 MHz, or solve for it');
-    objections.push(...unitObjections(stage.frequency, 'frequency'));
-    if ((stage.tolerance ?? '').trim() !== '' && toleranceOf(stage) === undefined)
-      objections.push([
-        'bad-tolerance',
-        `has the tolerance "${stage.tolerance ?? ''}", which cannot be read. Write it like ±20 ppm, ±0.002 % or ±5 kHz.`,
-      ]);
-  }
+  if ('frequency' in stage) objections.push(...sourceObjections(stage));
   if (stage.kind === 'multiplier') need(stage.factor, 'factor', '9');
   if (stage.kind === 'divider') need(stage.divisor, 'divisor', '8');
   if ('n' in stage) {
@@ -99,6 +92,18 @@ function parameterObjections(stage: Stage): Objection[] {
   }
   for (const edge of ['low', 'high'] as const)
     objections.push(...unitObjections(stage.limits?.[edge] ?? '', `${edge} limit`));
+  return objections;
+}
+
+function sourceObjections({ frequency, printed = '', tolerance = '', ...stage }: Sourced): Objection[] {
+  const objections = unitObjections(frequency, 'frequency');
+  if (`${frequency}${printed}`.trim() === '')
+    objections.push(['missing-parameter', 'has no frequency. Write one, like 16.2 MHz, or solve for it.']);
+  if (tolerance.trim() !== '' && toleranceOf({ ...stage, frequency, tolerance }) === undefined)
+    objections.push([
+      'bad-tolerance',
+      `has the tolerance "${tolerance}", which cannot be read. Write it like ±20 ppm, ±0.002 % or ±5 kHz.`,
+    ]);
   return objections;
 }
 

@@ -31,7 +31,14 @@ export function defineStage(stage: Stage): QuantityDefinition[] {
 const hasFrequency = (stage: Stage): stage is StageOf<'input' | 'crystal' | 'vcxo'> => 'frequency' in stage;
 
 function defineFrequency(stage: Stage): QuantityDefinition {
-  const bare = { symbol: symbolOfStage(stage.id), label: stage.name, unit: unitOf(stage), ...numericLimits(stage) };
+  const printed = (stage.printed ?? '').trim() === '' ? {} : { printed: { text: stage.printed ?? '' } };
+  const bare = {
+    symbol: symbolOfStage(stage.id),
+    label: stage.name,
+    unit: unitOf(stage),
+    ...printed,
+    ...numericLimits(stage),
+  };
   if (!hasFrequency(stage)) return { ...bare, kind: 'derived', expression: expressionOf(stage) };
   const spread = toleranceOf(stage);
   const text = stage.frequency.trim();

@@ -24,6 +24,8 @@ const common = {
   limits: z.object({ low: limit.optional(), high: limit.optional() }).optional(),
   /** The unit to show the frequency in; MHz where none is given. */
   unit: z.string().max(20).optional(),
+  /** What the manual prints for this frequency, unit included; provePlan holds it against the plan. */
+  printed: z.string().max(120).optional(),
   /** Where it stands in the drawing. */
   place: z.object({ x: z.number(), y: z.number() }).optional(),
 };

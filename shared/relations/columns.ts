@@ -19,6 +19,7 @@ export type ColumnRelation = {
 
 export type Column = {
   table: string;
+  title: string | undefined;
   name: string;
   dimension: string;
   unit: string;
@@ -35,10 +36,11 @@ export function columnsOf(numbers: readonly PrintedNumber[]): Column[] {
   const columns = new Map<string, Column & { cells: Map<number, PrintedNumber> }>();
   for (const number of numbers) {
     if (number.column === undefined) continue;
-    const { table, name, row } = number.column;
+    const { table, title, name, row } = number.column;
     const key = `${table}\n${name}\n${number.dimension}`;
     const column = columns.get(key) ?? {
       table,
+      title,
       name,
       dimension: number.dimension,
       unit: number.unit,

@@ -16,9 +16,10 @@ export type PrintedNumber = {
   /** One unit of the last printed digit, in the base unit. */
   grain: number;
   page: string;
+  /** What it is, in a word or three; longer ones are left out of sentences. */
   label?: string;
-  /** Where it stands in a table. */
-  column?: { table: string; name: string; row: number };
+  /** Where it stands in a table: `table` tells tables apart, `title` is what a reader calls it. */
+  column?: { table: string; title?: string; name: string; row: number };
 };
 
 type Place = Pick<PrintedNumber, 'id' | 'page'> & Partial<Pick<PrintedNumber, 'symbol' | 'label' | 'column'>>;

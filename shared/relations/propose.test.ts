@@ -98,7 +98,7 @@ describe('columns of a table', () => {
     expect(first).toMatchObject({
       expression: '(column_ship - 10.7 MHz) / 9',
       table: { holds: 5, rows: 6, failing: [3] },
-      says: 'In Table 2, CRYSTAL is (SHIP - 10.7 MHz) / 9 in 5 of 6 rows.',
+      says: 'Down the table, CRYSTAL is (SHIP - 10.7 MHz) / 9 in 5 of 6 rows.',
     });
   });
 

@@ -10,8 +10,11 @@ import type { RelationProposal } from './propose.ts';
 type Written = Omit<RelationProposal, 'score' | 'table'>;
 
 const nameOf = ({ number }: Node): string => number.symbol ?? number.id;
-const callOf = ({ number }: Node): string =>
-  number.label === undefined ? number.text.trim() : `${number.label} (${number.text.trim()})`;
+const longestLabel = 3;
+const callOf = ({ number: { label = '', text } }: Node): string => {
+  const words = label.trim().split(/\s+/);
+  return label.trim() === '' || words.length > longestLabel ? text.trim() : `${label.trim()} (${text.trim()})`;
+};
 
 export function writeTerms(candidate: Candidate): Written {
   const { factor, x, y, z, sign } = candidate;
@@ -92,9 +95,12 @@ export function writeColumns(relation: ColumnRelation, columns: readonly Column[
     filled: `${printed(a)} = ${write(printed, printedNode)}`,
     numbers: [...names.flatMap((name) => cell(name)?.id ?? []), ...(offsetId === undefined ? [] : [offsetId])],
     table: { table, holds: holds.length, rows, failing: missing },
-    says: `In ${table}, ${a} is ${write((name) => name, printedNode).replaceAll(' * ', ' × ')} in ${share}.`,
+    says: `${placeOf(at(a))}, ${a} is ${write((name) => name, printedNode).replaceAll(' * ', ' × ')} in ${share}.`,
   };
 }
+
+const placeOf = (column: Column | undefined): string =>
+  column?.title === undefined ? 'Down the table' : `In ${column.title}`;
 
 /** A name for a column that formulas take: letters, digits and _. */
 export const symbolOfColumn = (name: string): string => {

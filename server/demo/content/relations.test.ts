@@ -28,7 +28,7 @@ function cellsOf(block: Block, page: string): PrintedNumber[] {
   return block.rows.flatMap((cells, row) =>
     cells.flatMap((cell, at) => {
       const heading = block.columns[at]?.heading ?? '';
-      const column = { table: block.caption, name: heading.replace(/ (MC|KC)$/, ''), row };
+      const column = { table: block.caption, title: block.caption, name: heading.replace(/ (MC|KC)$/, ''), row };
       return readPrintedNumber(`${cell} ${unitIn(heading)}`.trim(), { id: `r${row}_${at}`, page, column }) ?? [];
     }),
   );
