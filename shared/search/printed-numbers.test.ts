@@ -37,7 +37,7 @@ describe('the printed numbers of a manual', () => {
 
   it('are those with a unit in its text, with the words ahead of them, and live ones with their symbol', () => {
     expect(numbers.slice(0, 2)).toMatchObject([
-      { id: 'n1', text: '10.700 mc', value: 10.7e6, dimension: 'frequency', page: 'p1', label: 'The first i-f is' },
+      { id: 'n1', text: '10.700 mc', value: 10.7e6, dimension: 'frequency', page: 'p1', label: 'First i-f' },
       { text: '145.900 mc', symbol: 'injection' },
     ]);
   });

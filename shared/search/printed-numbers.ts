@@ -1,3 +1,4 @@
+import { proposeName } from '#shared/calc/propose-name.ts';
 import type { TableColumn } from '#shared/document/blocks/table.ts';
 import { unitIn } from '#shared/document/channel-tables.ts';
 import type { DocNode } from '#shared/document/define-block.ts';
@@ -7,9 +8,6 @@ import { type PrintedNumber, readPrintedNumber } from '#shared/relations/printed
 import { quantitiesIn } from './quantities-in.ts';
 
 export type NumberedPage = { pageId: string; document: DocNode };
-
-/** So many words ahead of a number say what it is. */
-const wordsAhead = 8;
 
 /**
  * Every number with a unit that the pages of a manual print, and every number of their tables, in the order of reading. A
@@ -31,23 +29,27 @@ export function printedNumbersOf(
     const { text, symbolAt } = flat(node, symbolOf);
     for (const { start, end } of quantitiesIn(text)) {
       const symbol = symbolAt(start, end);
-      const label = text.slice(0, start).trim().split(/\s+/).slice(-wordsAhead).join(' ');
+      const { label } = proposeName(text.slice(0, start), []);
       add(text.slice(start, end), { page, label, ...(symbol === undefined ? {} : { symbol }) });
     }
   };
   const visitTable = (table: DocNode, page: string): void => {
     const columns = (table.attrs?.['columns'] ?? []) as TableColumn[];
     const rows = (table.content ?? []).filter(({ attrs }) => (attrs?.['role'] ?? 'body') === 'body');
-    rows.forEach((row, at) =>
-      cellTexts(row).forEach((cell, index) => {
+    rows.forEach((row, at) => {
+      const cells = cellTexts(row);
+      // "First i-f | 10.700 mc": a row that begins with words says itself what its number is.
+      const rowLabel = /[A-Za-z]{3}/.test(cells[0] ?? '') ? cells[0]?.trim() : undefined;
+      cells.forEach((cell, index) => {
         const heading = columns[index]?.heading ?? `column ${index + 1}`;
         const unit = unitIn(heading);
         const text = cell.trim();
         const isBare = /^[-+]?[\d.,]+$/.test(text);
         const column = { table: `${page} ${String(table.attrs?.['id'])}`, name: heading, row: at + 1 };
-        if (text !== '') add(isBare && unit !== '' ? `${text} ${unit}` : text, { page, label: heading, column });
-      }),
-    );
+        if (text !== '')
+          add(isBare && unit !== '' ? `${text} ${unit}` : text, { page, label: rowLabel ?? heading, column });
+      });
+    });
   };
   for (const { pageId, document } of pages) visit(document, pageId);
   return numbers;

@@ -23,7 +23,11 @@ export function relationRoutes(router: ApiRouter, tools: Tools & { sideWorker: S
     existingManual(db, params.manualId);
     const pages = documentsOfManual(db, params.manualId);
     const labels = new Map(pages.map(({ pageId, label }) => [pageId, label]));
-    const symbols = new Map(quantityRows(db, params.manualId).map(({ id, symbol }) => [id, symbol]));
+    const quantities = quantityRows(db, params.manualId);
+    const symbols = new Map(quantities.map(({ id, symbol }) => [id, symbol]));
+    const known = new Set(
+      quantities.flatMap(({ symbol, definition }) => (definition.kind === 'derived' ? [symbol] : [])),
+    );
     const numbers = printedNumbersOf(pages, symbols).slice(0, mostNumbers);
     const judged = new Set(
       db
@@ -33,7 +37,10 @@ export function relationRoutes(router: ApiRouter, tools: Tools & { sideWorker: S
         .all()
         .map(({ relation }) => relation),
     );
-    const found = (await proposalsFor(tools.sideWorker, numbers)).filter(({ filled }) => !judged.has(filled));
+    const found = (await proposalsFor(tools.sideWorker, numbers)).filter(
+      // What has a formula already needs no other.
+      ({ filled, target }) => !judged.has(filled) && !known.has(target),
+    );
     return { items: found.map((each) => replyOf(each, numbers, labels)), numbers: numbers.length };
   });
   serve(router, api.judgeRelation, ({ user, params, body }) => {
