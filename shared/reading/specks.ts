@@ -19,9 +19,29 @@ export function withoutSpecks(words: readonly ReadingWord[]): ReadingWord[] {
   const solid = words.filter(({ text, confidence }) => text.length > 2 && confidence >= speckBelow);
   const isAlone = ({ box }: ReadingWord): boolean =>
     !solid.some((other) => Math.abs(middleOf(other.box) - middleOf(box)) < letter * 0.7);
+  const rim = rimOf(words, letter);
   return words.filter(
-    (word) => !isSpeck(word, letter) && !(word.text.length <= 2 && word.confidence < 80 && isAlone(word)),
+    (word) =>
+      !rim.has(word) && !isSpeck(word, letter) && !(word.text.length <= 2 && word.confidence < 80 && isAlone(word)),
   );
+}
+
+/** Words that surely are words mark where the print ends; so many letter heights beyond them begins the rim. */
+const surelyWord = 60;
+const rimLetters = 0.8;
+
+/**
+ * The shadow along the edge of the sheet is read as a column of single letters. They are told from markers and counts, which
+ * also stand beside all other print, by how little the engine trusts them as a whole.
+ */
+function rimOf(words: readonly ReadingWord[], letter: number): Set<ReadingWord> {
+  const sure = words.filter(({ text, confidence }) => text.length > 2 && confidence >= surelyWord);
+  if (sure.length === 0) return new Set();
+  const left = Math.min(...sure.map(({ box }) => box[0])) - letter * rimLetters;
+  const right = Math.max(...sure.map(({ box }) => box[0] + box[2])) + letter * rimLetters;
+  const short = words.filter(({ text }) => text.length <= 2);
+  const sides = [short.filter(({ box }) => box[0] + box[2] < left), short.filter(({ box }) => box[0] > right)];
+  return new Set(sides.filter((side) => median(side.map(({ confidence }) => confidence)) < speckBelow).flat());
 }
 
 function isSpeck({ text, confidence, box: [, , width, height] }: ReadingWord, letter: number): boolean {

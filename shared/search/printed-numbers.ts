@@ -23,9 +23,8 @@ export function printedNumbersOf(
     if (number !== undefined) numbers.push(number);
   };
   const visit = (node: DocNode, page: string): void => {
-    if (node.type === 'table') return visitTable(node, page);
     const inline = node.content?.some(({ type }) => type === 'text' || type === 'liveValue') ?? false;
-    if (!inline) return node.content?.forEach((child) => visit(child, page));
+    if (!inline) return visitChildren(node, page);
     const { text, symbolAt } = flat(node, symbolOf);
     for (const { start, end } of quantitiesIn(text)) {
       const symbol = symbolAt(start, end);
@@ -33,7 +32,13 @@ export function printedNumbersOf(
       add(text.slice(start, end), { page, label, ...(symbol === undefined ? {} : { symbol }) });
     }
   };
-  const visitTable = (table: DocNode, page: string): void => {
+  const visitChildren = ({ content = [] }: DocNode, page: string): void =>
+    content.forEach((child, at) => {
+      if (child.type !== 'table') return visit(child, page);
+      const caption = [content[at - 1], content[at + 1]].find((each) => each?.type === 'caption');
+      visitTable(child, page, caption === undefined ? undefined : textOf(caption).trim());
+    });
+  const visitTable = (table: DocNode, page: string, title: string | undefined): void => {
     const columns = (table.attrs?.['columns'] ?? []) as TableColumn[];
     const rows = (table.content ?? []).filter(({ attrs }) => (attrs?.['role'] ?? 'body') === 'body');
     rows.forEach((row, at) => {
@@ -45,7 +50,8 @@ export function printedNumbersOf(
         const unit = unitIn(heading);
         const text = cell.trim();
         const isBare = /^[-+]?[\d.,]+$/.test(text);
-        const column = { table: `${page} ${String(table.attrs?.['id'])}`, name: heading, row: at + 1 };
+        const where = { table: `${page} ${String(table.attrs?.['id'])}`, ...(title === undefined ? {} : { title }) };
+        const column = { ...where, name: heading, row: at + 1 };
         if (text !== '')
           add(isBare && unit !== '' ? `${text} ${unit}` : text, { page, label: rowLabel ?? heading, column });
       });
