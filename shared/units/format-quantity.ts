@@ -40,13 +40,29 @@ export function formatLikePrinted(value: number, unit: string, printedText: stri
 }
 
 function writeNumber(value: number, parsed: ParsedQuantity): string {
-  const fixed = withoutMinusZero(settle(value).toFixed(parsed.decimals));
-  const [, sign = '', whole = '', point = ''] = /^(-?)(\d+)(.*)$/.exec(fixed) ?? [];
   const { layout, printed } = parsed;
+  const { power } = layout;
+  const shifted = power === undefined ? settle(value) : settle(value).times(`1e${-power.power}`);
+  const fixed = withoutMinusZero(shifted.toFixed(power?.decimals ?? parsed.decimals));
+  const [sign, whole, point] = takeApart(fixed);
   const written = printed.slice(layout.start, layout.end);
   const lead = leadLike(whole, point, layout);
   if (layout.notation === 'letter') return `${sign}${lead}${/\D/.exec(written)?.[0] ?? ''}${point.slice(1)}`;
-  return `${sign === '' && written.startsWith('+') ? '+' : sign}${lead}${point}`;
+  // `455.` keeps its idle point.
+  const end = point === '' && /^[^.]*\d\.(?!\d)/.test(written) ? '.' : point;
+  return `${signLike(sign, written)}${lead}${end}${power?.text ?? ''}`;
+}
+
+function takeApart(fixed: string): [sign: string, whole: string, point: string] {
+  const [, sign = '', whole = '', point = ''] = /^(-?)(\d+)(.*)$/.exec(fixed) ?? [];
+  return [sign, whole, point];
+}
+
+/** The sign as the paper writes it: a plus that it prints, its own kind of minus. */
+function signLike(sign: string, written: string): string {
+  const printedSign = /^[-+\u2212\u2013]\s*/.exec(written)?.[0] ?? '';
+  if (sign === '') return printedSign.startsWith('+') ? printedSign : '';
+  return printedSign === '' || printedSign.startsWith('+') ? sign : printedSign;
 }
 
 function leadLike(whole: string, point: string, { bareDecimalPoint, grouped }: QuantityLayout): string {
@@ -55,6 +71,14 @@ function leadLike(whole: string, point: string, { bareDecimalPoint, grouped }: Q
 }
 
 const withoutMinusZero = (digits: string): string => (/^-0(?:\.0*)?$/.test(digits) ? digits.slice(1) : digits);
+
+/** The quantity as the paper prints it: written anew from what was read, so that a reading that loses something shows. */
+export function printQuantity(parsed: ParsedQuantity): string {
+  const { printed, range, decimalText, unit } = parsed;
+  // The ends of a range may have different units and digits; they are not taken apart again.
+  if (range !== undefined) return printed;
+  return formatLikePrinted(Number(decimalText), unit, printed);
+}
 
 /** Rounds to printed decimals, half away from zero; for comparing with paper. */
 export const roundToDecimals = (value: number, decimals: number): number =>
