@@ -30,13 +30,25 @@ function formatNumber(value: number, { decimals, significant }: FormatOptions): 
  * its bare point (`.455 mc`), its letter code (`4K7`), and everything after the number, tolerance included.
  */
 export function formatLikePrinted(value: number, unit: string, printedText: string): string {
-  const parsed = parseQuantity(printedText);
+  const parsed = parsePrinted(printedText);
   if (!parsed.ok || !Number.isFinite(value)) return formatQuantity(value, unit);
   const { layout, unit: printedUnit } = parsed.value;
   const inPrinted = printedUnit === '' ? { ok: true as const, value } : convert(value, unit, printedUnit);
   if (!inPrinted.ok) return formatQuantity(value, unit);
   const number = writeNumber(inPrinted.value, parsed.value);
   return `${printedText.slice(0, layout.start)}${number}${printedText.slice(layout.end)}`;
+}
+
+/** A page writes the same few hundred printed texts anew with every change; reading them took most of the time that it did. */
+const keptReadings = 4000;
+const readings = new Map<string, ReturnType<typeof parseQuantity>>();
+function parsePrinted(text: string): ReturnType<typeof parseQuantity> {
+  const known = readings.get(text);
+  if (known !== undefined) return known;
+  if (readings.size >= keptReadings) readings.clear();
+  const read = parseQuantity(text);
+  readings.set(text, read);
+  return read;
 }
 
 function writeNumber(value: number, parsed: ParsedQuantity): string {

@@ -36,8 +36,8 @@ type Given = {
 export function createLiveStore({ manualId, quantities, inputs, onChange }: Given): LiveStore {
   const program = compile(quantities, builtInTables);
   const byId = new Map(quantities.map((each) => [each.id, each]));
-  const isInput = (symbol: string): boolean =>
-    quantities.some((each) => each.symbol === symbol && each.kind === 'input');
+  const inputSymbols = new Set(quantities.flatMap(({ symbol, kind }) => (kind === 'input' ? [symbol] : [])));
+  const isInput = (symbol: string): boolean => inputSymbols.has(symbol);
   let setting = Object.fromEntries(Object.entries(inputs).filter(([symbol]) => isInput(symbol)));
   const session = createSession(program, setting);
   const home = evaluate(program).values;
@@ -71,15 +71,17 @@ export function createLiveStore({ manualId, quantities, inputs, onChange }: Give
     setting: () => setting,
     set: (symbol, value) => changed(set(symbol, value)),
     backToHome: (symbol) => {
-      setting =
-        symbol === undefined ? {} : Object.fromEntries(Object.entries(setting).filter(([each]) => each !== symbol));
-      changed([...session.reset(symbol).changed, ...Object.keys(home)]);
+      const left = symbol === undefined ? Object.keys(setting) : [symbol];
+      setting = Object.fromEntries(Object.entries(setting).filter(([each]) => !left.includes(each)));
+      // Only what differs is drawn again: on a page of a thousand values most stand still.
+      changed([...session.reset(symbol).changed, ...left]);
     },
     takeSetting: (next) => {
+      const left = Object.keys(setting);
       setting = {};
-      session.reset();
-      for (const [symbol, value] of Object.entries(next)) set(symbol, value);
-      changed(Object.keys(home));
+      const symbols = [...left, ...session.reset().changed];
+      for (const [symbol, value] of Object.entries(next)) symbols.push(...set(symbol, value));
+      changed(symbols);
     },
     evaluate: (options) => evaluate(program, setting, options),
     subscribe: (listener) => {
