@@ -5,6 +5,7 @@ import { compileDerivative } from './compile-derivative.ts';
 import { compileExpression } from './compile-expression.ts';
 import { planCode, placeCode, runPlan } from './flat-code.ts';
 import { scope, slots } from './formula.fixture.ts';
+import { functionDefinitions } from './functions.ts';
 import { lowerExpression, startCode } from './lower-expression.ts';
 import { parseExpression } from './parse-expression.ts';
 import { printExpression } from './print-expression.ts';
@@ -138,6 +139,12 @@ describe('flat code', () => {
     );
     // Parsing ten thousand formulas takes its time on a busy machine.
   }, 60_000);
+
+  it.each(functionDefinitions)('knows $name', ({ example }) => {
+    const parsed = parseExpression(example.text);
+    if (!parsed.ok) throw new Error(parsed.error.message);
+    expect(runFlat(parsed.value, slots)).toBe(compileExpression(parsed.value, scope)(slots));
+  });
 
   it('agrees with the full mathjs', () => {
     fc.assert(
