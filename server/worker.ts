@@ -2,6 +2,7 @@ import sharp from 'sharp';
 import { type InspectInput, inspect } from '#server/features/pages/inspect.ts';
 import { type DrawInput, drawPage } from '#server/features/pages/draw.ts';
 import type { WorkerReply, WorkerRequest } from '#server/jobs/worker-pool.ts';
+import type { PrintedNumber } from '#shared/relations/printed-number.ts';
 import type { ReadInput } from '#server/features/recognition/read.ts';
 import type { ReadZoneInput } from '#server/features/recognition/read-zone.ts';
 
@@ -14,6 +15,8 @@ const tasks: Record<string, (input: never) => Promise<unknown>> = {
   draw: (input: DrawInput) => drawPage(input),
   'read-zone': async (input: ReadZoneInput) =>
     (await import('#server/features/recognition/read-zone.ts')).readZone(input),
+  'propose-relations': async (numbers: PrintedNumber[]) =>
+    (await import('#shared/relations/propose.ts')).proposeRelations(numbers),
   read: async (input: ReadInput) => (await import('#server/features/recognition/read.ts')).readPage(input),
 };
 

@@ -91,6 +91,7 @@ async function work(editor: DemoCaller, { manual, id }: Work): Promise<void> {
   const { items: pages } = await editor.get<{ items: PageSummary[] }>(`/api/manuals/${id}/pages`);
   const pageOf = new Map(manual.pages.map(({ label }, index) => [label, pages[index]]));
   const quantities = await addQuantities(editor, { manual, id }, pageOf);
+  await addPlan(editor, { manual, id });
   for (const [index, page] of manual.pages.entries()) {
     const row = pages[index];
     if (row !== undefined && row.label !== page.label)
@@ -125,6 +126,12 @@ async function addQuantities(
     known.set(quantity.symbol, made.id);
   }
   return known;
+}
+
+async function addPlan(editor: DemoCaller, { manual, id }: Work): Promise<void> {
+  const { number } = await editor.get<{ number: number }>(`/api/manuals/${id}/frequency-plan`);
+  if (manual.plan === undefined || number > 0) return;
+  await editor.send('PUT', `/api/manuals/${id}/frequency-plan`, { baseNumber: 0, plan: manual.plan });
 }
 
 const definitionOf = ({ symbol, label, kind, unit, expression, home, integer, printed }: DemoQuantity) => ({

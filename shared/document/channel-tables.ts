@@ -86,7 +86,7 @@ function numberIn(cell = ''): number {
 }
 
 /** The unit in a heading: "FREQUENCY (MC)", "CRYSTAL MC". '' where there is none. */
-function unitIn(heading: string): string {
+export function unitIn(heading: string): string {
   const bracketed = /[([]\s*([^)\]]+?)\s*[)\]]/.exec(heading)?.[1];
   const last = heading.trim().split(/\s+/).at(-1) ?? '';
   const found = [bracketed, last].find((text) => text !== undefined && text !== '' && isUnit(text));

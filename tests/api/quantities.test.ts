@@ -163,3 +163,44 @@ describe('the change sheet', () => {
     expect((await editor.post(at('change-sheet'), { after: { channel: { a: 1 } } })).status).toBe(400);
   });
 });
+
+describe('the frequency plan', () => {
+  const stages = [
+    { id: 'y1', kind: 'crystal', name: 'Y1', from: [], frequency: 'crystal' },
+    { id: 'times9', kind: 'multiplier', name: 'Triplers', from: ['y1'], factor: '9' },
+  ];
+
+  it('is kept with the manual, and its stages are values like any other', async () => {
+    expect((await editor.get(at('frequency-plan'))).body).toMatchObject({ number: 0, plan: { stages: [] } });
+    const saved = await editor.put(at('frequency-plan'), { baseNumber: 0, plan: { stages } });
+    expect(saved).toMatchObject({ status: 200, body: { number: 1, savedBy: 'Test editor' } });
+    const { body } = await editor.post(at('evaluate'), { inputs: { channel: 16 } });
+    expect(body.values['plan_times9'].value).toBeCloseTo(146.1, 9);
+  });
+
+  it('is not overwritten by one that builds upon an older', async () => {
+    const late = await editor.put(at('frequency-plan'), { baseNumber: 0, plan: { stages: [] } });
+    expect(late).toMatchObject({ status: 409, body: { current: { number: 1 } } });
+    expect((await editor.get(at('frequency-plan'))).body.plan.stages).toHaveLength(2);
+  });
+
+  it('refuses what is no plan, and readers', async () => {
+    const plan = { stages: [{ id: 'a b', kind: 'siphon', name: '', from: [] }] };
+    expect((await editor.put(at('frequency-plan'), { baseNumber: 1, plan })).status).toBe(400);
+    const reader = await server.as('reader');
+    expect((await reader.put(at('frequency-plan'), { baseNumber: 1, plan: { stages } })).status).toBe(403);
+  });
+});
+
+describe('relations among the printed numbers', () => {
+  it('are looked for by editors, and judged once', async () => {
+    const { status, body } = await editor.post(at('relations'));
+    // No page of this manual has been read, so no number is printed.
+    expect({ status, body }).toEqual({ status: 200, body: { items: [], numbers: 0 } });
+    const verdict = { relation: '145.9 mc = 156.6 mc - 10.7 mc', verdict: 'dismissed' };
+    expect((await editor.post(at('relations/verdicts'), verdict)).status).toBe(200);
+    expect((await editor.post(at('relations/verdicts'), { ...verdict, verdict: 'accepted' })).status).toBe(200);
+    expect((await editor.post(at('relations/verdicts'), { relation: '', verdict: 'perhaps' })).status).toBe(400);
+    expect((await (await server.as('technician')).post(at('relations'))).status).toBe(403);
+  });
+});

@@ -218,4 +218,65 @@ describe('the four stories', () => {
     await keepPicture(page, 'reader');
     await context.close();
   });
+
+  it('the technician takes along what a change of channel changes, and learns what a crystal at hand is', async () => {
+    const { page, context } = await windowOf('technician');
+    await page.getByRole('link', { name: /HB-12/ }).first().click();
+    await page.getByRole('link', { name: 'Calculations' }).click();
+    await page.getByRole('button', { name: 'Setting', exact: true }).click();
+    await page.getByLabel('Channel', { exact: true }).fill('16');
+    await page.getByRole('tab', { name: 'Change sheet' }).click();
+    const crystal = page.getByRole('row').filter({ hasText: 'Channel crystal Y1' }).first();
+    await expect.poll(() => crystal.textContent()).toContain('16.233333 mc');
+    expect(await crystal.textContent()).toContain('16.211111 mc');
+    expect(await seriousFindings(page)).toEqual([]);
+    await keepPicture(page, 'change-sheet');
+
+    await page.getByRole('tab', { name: 'Crystals' }).click();
+    await page.getByLabel('Marked frequency').fill('16.2333');
+    await page.getByText(/nearest to channel/).waitFor();
+    expect(await page.getByText(/nearest to channel/).textContent()).toContain('16');
+    expect(await seriousFindings(page)).toEqual([]);
+    await context.close();
+  });
+
+  it('the editor adds a stage to the frequency plan, is told what it lacks, and saves it', async () => {
+    const { page, context } = await windowOf('editor');
+    await page.getByRole('link', { name: /HB-12/ }).first().click();
+    await page.getByRole('link', { name: 'Calculations' }).click();
+    await page.getByRole('tab', { name: 'Frequency plan' }).click();
+    await page.getByRole('button', { name: /^Oscillator V4, Y1/ }).click();
+    await page.getByLabel('Kind of stage').selectOption('multiplier');
+    await page.getByRole('button', { name: 'Add it behind Oscillator V4, Y1' }).click();
+    const stage = page.getByRole('region', { name: 'This stage' });
+    await expect.poll(() => stage.textContent()).toContain('Has no factor');
+    await stage.getByLabel('Name').fill('Test point doubler');
+    await stage.getByLabel('Times').fill('2');
+    // The crystal for channel 12, 16.211111 mc, twice.
+    const made = page.getByRole('button', { name: /^Test point doubler/ });
+    await expect.poll(() => made.textContent()).toContain('32.42222');
+    expect(await seriousFindings(page)).toEqual([]);
+    await page.getByRole('button', { name: 'Save the plan' }).click();
+    await page.getByText('The plan is saved.').waitFor();
+    await page.reload();
+    await made.waitFor();
+    await keepPicture(page, 'frequency-plan');
+    await context.close();
+  });
+
+  it('the editor has a block read again and is shown both readings', async () => {
+    const { page, context } = await windowOf('editor');
+    await page.getByRole('link', { name: /HB-12/ }).first().click();
+    await page.getByRole('link', { name: 'Correct: page 5-1' }).click();
+    await pageText(page).locator('p[data-zone], [data-zone]').nth(4).click();
+    await page.getByRole('button', { name: 'Read again', exact: true }).click();
+    const panel = page.getByRole('region', { name: 'Read again' });
+    await panel.getByRole('button', { name: 'Read it' }).click();
+    await panel
+      .getByText(/It reads the same|Reads now|Nothing can be made out/)
+      .first()
+      .waitFor({ timeout: 60_000 });
+    expect(await seriousFindings(page)).toEqual([]);
+    await context.close();
+  });
 });

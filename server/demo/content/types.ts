@@ -1,3 +1,4 @@
+import type { FrequencyPlan } from '#shared/plan/plan.ts';
 /** The demo manuals as data: what is printed on each page, and what of it is live. */
 import type { ColumnMeaning } from '#shared/document/blocks/table.ts';
 
@@ -92,4 +93,5 @@ export interface DemoManual {
   readonly pages: readonly ManualPage[];
   readonly quantities: readonly DemoQuantity[];
   readonly livePlaces: readonly LivePlace[];
+  readonly plan?: FrequencyPlan;
 }

@@ -1,5 +1,7 @@
 import { and, asc, eq, like } from 'drizzle-orm';
+import type { ChannelTable } from '#shared/api/calculations.ts';
 import type { Quantity, Setting } from '#shared/api/quantities.ts';
+import { channelTablesOf } from '#shared/document/channel-tables.ts';
 import { pages, quantities, revisions, settings } from '#server/db/schema/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 
@@ -49,12 +51,23 @@ export const findSetting = (db: Connection, manualId: string, id: string) =>
     .where(and(eq(settings.manualId, manualId), eq(settings.id, id)))
     .get();
 
-/** The current documents of the pages that have live values on them, in order. */
-export const pagesWithLiveValues = (db: Connection, manualId: string) =>
+/** The current documents of the pages that hold what is looked for, in order. */
+const pagesHolding = (db: Connection, manualId: string, json: string) =>
   db
     .select({ pageId: pages.id, pageLabel: pages.label, document: revisions.document })
     .from(pages)
     .innerJoin(revisions, and(eq(revisions.pageId, pages.id), eq(revisions.number, pages.revision)))
-    .where(and(eq(pages.manualId, manualId), like(revisions.document, '%"liveValue"%')))
+    .where(and(eq(pages.manualId, manualId), like(revisions.document, `%${json}%`)))
     .orderBy(asc(pages.position))
     .all();
+
+export const pagesWithLiveValues = (db: Connection, manualId: string) => pagesHolding(db, manualId, '"liveValue"');
+
+/** The channel tables that editors have tagged on the pages of a manual; of two with one name the first counts. */
+export function channelTablesOfManual(db: Connection, manualId: string): ChannelTable[] {
+  const byId = new Map<string, ChannelTable>();
+  for (const { pageId, pageLabel, document } of pagesHolding(db, manualId, '"kind":"channel"'))
+    for (const table of channelTablesOf(document, pageLabel))
+      if (!byId.has(table.id)) byId.set(table.id, { ...table, rows: table.rows.map((row) => [...row]), pageId });
+  return [...byId.values()];
+}

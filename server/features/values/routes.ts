@@ -10,11 +10,14 @@ import { existingManual } from '#server/features/manuals/index.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
+import type { SideWorker } from '#server/jobs/side-worker.ts';
 import { findSetting, quantityReply, quantityRows, settingRows } from './queries.ts';
-import { changeSheetRoutes } from './change-sheet.ts';
+import { calculationSheetRoutes } from './calculations.ts';
+import { planRoutes } from './plan.ts';
+import { relationRoutes } from './relations.ts';
 import { createQuantity, deleteQuantity, programOf, updateQuantity } from './service.ts';
 
-export function valueRoutes(router: ApiRouter, tools: Tools): void {
+export function valueRoutes(router: ApiRouter, tools: Tools & { sideWorker: SideWorker }): void {
   const { db } = tools;
   serve(router, api.listQuantities, ({ params, query }) => {
     existingManual(db, params.manualId);
@@ -37,7 +40,9 @@ export function valueRoutes(router: ApiRouter, tools: Tools): void {
     return { ok: true as const };
   });
   calculationRoutes(router, tools);
-  changeSheetRoutes(router, tools);
+  calculationSheetRoutes(router, tools);
+  planRoutes(router, tools);
+  relationRoutes(router, tools);
   settingRoutes(router, tools);
 }
 

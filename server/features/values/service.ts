@@ -3,6 +3,7 @@ import { eq } from 'drizzle-orm';
 import { type Quantity, type QuantityInput, quantityInput } from '#shared/api/quantities.ts';
 import { builtInTables } from '#shared/calc/channel-plans.ts';
 import { type Program, compile } from '#shared/calc/program.ts';
+import { compilePlan } from '#shared/plan/compile-plan.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { quantities } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
@@ -10,17 +11,18 @@ import { existingManual } from '#server/features/manuals/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { SignedIn } from '#server/http/session.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { findQuantity, quantityReply, quantityRows } from './queries.ts';
+import { planOfManual } from './plan.ts';
+import { channelTablesOfManual, findQuantity, quantityReply, quantityRows } from './queries.ts';
 
 type Who = Pick<SignedIn, 'id' | 'name'>;
 
-/** The quantities of a manual, compiled: order, units and problems. */
+/** The quantities of a manual and of its frequency plan, compiled: order, units and problems. */
 export function programOf(db: Connection, manualId: string): Program {
   existingManual(db, manualId);
-  return compile(
-    quantityRows(db, manualId).map(({ definition }) => definition),
-    builtInTables,
-  );
+  const definitions = quantityRows(db, manualId).map(({ definition }) => definition);
+  const tables = [...builtInTables, ...channelTablesOfManual(db, manualId)];
+  const plan = compilePlan(planOfManual(db, manualId), definitions, tables);
+  return compile([...definitions, ...plan.definitions], tables);
 }
 
 export function createQuantity(

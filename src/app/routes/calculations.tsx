@@ -3,7 +3,11 @@ import { Link, useParams, useSearchParams } from 'react-router';
 import { oneManual } from '#src/api/manuals.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { ChangeSheetView } from '#src/features/calculations/change-sheet.tsx';
+import { ChannelTables } from '#src/features/calculations/channel-tables.tsx';
+import { Crystals } from '#src/features/calculations/crystals.tsx';
 import { Dependencies } from '#src/features/calculations/dependencies.tsx';
+import { PlanView } from '#src/features/calculations/plan-view.tsx';
+import { Proposals } from '#src/features/calculations/proposals.tsx';
 import { ProofView } from '#src/features/calculations/proof-view.tsx';
 import { ValuesSheet } from '#src/features/manual/values-sheet.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
@@ -14,7 +18,7 @@ import { Screen } from '#src/ui/screen.tsx';
 import { Tabs, TabSheet } from '#src/ui/tabs.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
 
-const views = ['values', 'changes', 'dependencies', 'proof'] as const;
+const views = ['values', 'changes', 'plan', 'dependencies', 'proof', 'proposals', 'crystals', 'tables'] as const;
 type View = (typeof views)[number];
 const viewIn = (asked: string | null): View => views.find((view) => view === asked) ?? 'values';
 
@@ -57,8 +61,12 @@ export function Component() {
           tabs={[
             { value: 'values', label: 'Values' },
             { value: 'changes', label: 'Change sheet' },
+            { value: 'plan', label: 'Frequency plan' },
             { value: 'dependencies', label: 'Dependencies' },
             { value: 'proof', label: 'Proof' },
+            { value: 'proposals', label: 'Relations' },
+            { value: 'crystals', label: 'Crystals' },
+            { value: 'tables', label: 'Channel tables' },
           ]}
         >
           <TabSheet value="values">
@@ -67,11 +75,23 @@ export function Component() {
           <TabSheet value="changes">
             <ChangeSheetView manualId={manual.id} />
           </TabSheet>
+          <TabSheet value="plan">
+            <PlanView manualId={manual.id} />
+          </TabSheet>
           <TabSheet value="dependencies">
             <Dependencies />
           </TabSheet>
           <TabSheet value="proof">
             <ProofView />
+          </TabSheet>
+          <TabSheet value="proposals">
+            <Proposals manualId={manual.id} />
+          </TabSheet>
+          <TabSheet value="crystals">
+            <Crystals />
+          </TabSheet>
+          <TabSheet value="tables">
+            <ChannelTables manualId={manual.id} />
           </TabSheet>
         </Tabs>
       </Screen>

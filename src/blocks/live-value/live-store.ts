@@ -5,11 +5,17 @@ import { type EvaluateOptions, type Evaluation, evaluate, type InputValues } fro
 import { createSession } from '#shared/calc/live-session.ts';
 import { type Program, compile } from '#shared/calc/program.ts';
 import { type Proof, proof } from '#shared/calc/proof.ts';
+import type { LookupTable } from '#shared/calc/tables.ts';
+import { type PlanProblem, compilePlan } from '#shared/plan/compile-plan.ts';
+import type { FrequencyPlan } from '#shared/plan/plan.ts';
 
 /** The quantities of one manual at a setting that is being changed. What is read stays the same object until it changes. */
 export type LiveStore = {
   manualId: string;
   program: Program;
+  plan: FrequencyPlan;
+  /** What is wrong with the plan whatever the setting. */
+  planProblems: readonly PlanProblem[];
   quantities: readonly Quantity[];
   quantity: (id: string) => Quantity | undefined;
   proof: Proof;
@@ -29,16 +35,23 @@ export type LiveStore = {
 type Given = {
   manualId: string;
   quantities: readonly Quantity[];
+  /** The manual's own channel tables, besides the published ones. */
+  tables?: readonly LookupTable[];
+  /** The signal chain, whose stages are quantities too. */
+  plan?: FrequencyPlan;
   inputs: InputValues;
   onChange: (inputs: InputValues) => void;
 };
 
-export function createLiveStore({ manualId, quantities, inputs, onChange }: Given): LiveStore {
-  const program = compile(quantities, builtInTables);
+const noPlan: FrequencyPlan = { stages: [] };
+
+export function createLiveStore(given: Given): LiveStore {
+  const { manualId, quantities, tables = [], plan = noPlan, onChange } = given;
+  const { program, planProblems } = compiled(quantities, tables, plan);
   const byId = new Map(quantities.map((each) => [each.id, each]));
-  const inputSymbols = new Set(quantities.flatMap(({ symbol, kind }) => (kind === 'input' ? [symbol] : [])));
-  const isInput = (symbol: string): boolean => inputSymbols.has(symbol);
-  let setting = Object.fromEntries(Object.entries(inputs).filter(([symbol]) => isInput(symbol)));
+  const inputs = new Set(quantities.flatMap(({ kind, symbol }) => (kind === 'input' ? [symbol] : [])));
+  const isInput = (symbol: string): boolean => inputs.has(symbol);
+  let setting = Object.fromEntries(Object.entries(given.inputs).filter(([symbol]) => isInput(symbol)));
   const session = createSession(program, setting);
   const home = evaluate(program).values;
   const listeners = new Set<() => void>();
@@ -60,6 +73,8 @@ export function createLiveStore({ manualId, quantities, inputs, onChange }: Give
   return {
     manualId,
     program,
+    plan,
+    planProblems,
     quantities,
     quantity: (id) => byId.get(id),
     proof: proof(program),
@@ -89,6 +104,12 @@ export function createLiveStore({ manualId, quantities, inputs, onChange }: Give
       return () => listeners.delete(listener);
     },
   };
+}
+
+function compiled(quantities: readonly Quantity[], tables: readonly LookupTable[], plan: FrequencyPlan) {
+  const lookedInto = [...builtInTables, ...tables];
+  const { definitions, problems } = compilePlan(plan, quantities, lookedInto);
+  return { program: compile([...quantities, ...definitions], lookedInto), planProblems: problems };
 }
 
 /** Typed at home's own value, an input is at home: nothing then counts as moved. */

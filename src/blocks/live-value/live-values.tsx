@@ -3,6 +3,7 @@ import { createContext, type ReactNode, useContext, useMemo, useState, useSyncEx
 import type { Quantity } from '#shared/api/quantities.ts';
 import type { LiveValue } from '#shared/calc/describe-value.ts';
 import type { InputValues } from '#shared/calc/evaluate.ts';
+import { channelTablesOfManual, planOfManual } from '#src/api/calculations.ts';
 import { quantitiesOfManual } from '#src/api/quantities.ts';
 import { useStored } from '#src/lib/use-stored.ts';
 import { createLiveStore, type LiveStore } from './live-store.ts';
@@ -18,18 +19,22 @@ const SharedValues = createContext<Shared>({ store: null, view: 'both', setView:
 /** The values of one manual for everything inside. The setting is kept for the tab; an address may bring one (`?setting=channel:16`). */
 export function LiveValues({ manualId, children }: { manualId: string; children: ReactNode }) {
   const { data } = useQuery(quantitiesOfManual(manualId));
+  const { data: tables } = useQuery(channelTablesOfManual(manualId));
+  const { data: stored } = useQuery(planOfManual(manualId));
   const [view, setView] = useStored('benchleaf.values', valueViews, 'both');
   useState(() => takeFromAddress(manualId));
   const store = useMemo(() => {
-    if (data === undefined) return null;
+    if (data === undefined || tables === undefined || stored === undefined) return null;
     const inputs = readSetting(manualId);
     return createLiveStore({
       manualId,
       quantities: data,
+      tables,
+      plan: stored.plan,
       inputs,
       onChange: (setting) => writeSetting(manualId, setting),
     });
-  }, [manualId, data]);
+  }, [manualId, data, tables, stored]);
   const shared = useMemo(() => ({ store, view, setView }), [store, view, setView]);
   return <SharedValues.Provider value={shared}>{children}</SharedValues.Provider>;
 }

@@ -1,6 +1,9 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router';
 import type { LiveValue, Sensitivity } from '#shared/calc/describe-value.ts';
+import { sensitivityWords } from '#shared/calc/sensitivity-words.ts';
 import { formatQuantity } from '#shared/units/format-quantity.ts';
+import { inSi } from '#shared/units/in-si.ts';
 import { StateWord } from '#src/ui/state-word.tsx';
 import { filledIn } from './filled-in.ts';
 import { type LiveQuantity, useSetting } from './live-values.tsx';
@@ -36,16 +39,14 @@ export function ValueDetails({ live, placed }: Props) {
             </>
           )}
         </Line>
+        <InSiUnits text={placed.asSet} />
         <Line label="At home">
           <AtHome live={live} />
         </Line>
         <Bounds quantity={quantity} value={deeper} />
       </dl>
-      <Sensitivities
-        of={deeper?.sensitivity}
-        unit={quantity.unit}
-        unitOf={(symbol) => store.read(symbol)?.unit ?? ''}
-      />
+      <Sensitivities of={deeper?.sensitivity} live={live} />
+      <WhereDefined quantity={quantity} />
     </div>
   );
 }
@@ -118,29 +119,50 @@ function AtHome({ live: { quantity, store } }: { live: LiveQuantity }) {
   );
 }
 
-type SensitivityProps = {
-  of: Record<string, Sensitivity> | undefined;
-  unit: string;
-  unitOf: (symbol: string) => string;
-};
+type SensitivityProps = { of: Record<string, Sensitivity> | undefined; live: LiveQuantity };
 
-function Sensitivities({ of, unit, unitOf }: SensitivityProps) {
-  const entries = Object.entries(of ?? {}).filter(([, { absolute }]) => absolute !== 0);
-  if (entries.length === 0) return null;
+function Sensitivities({ of, live: { quantity, store } }: SensitivityProps) {
+  const sentences = Object.entries(of ?? {}).flatMap(([symbol, sensitivity]) => {
+    const input = store.program.cells[store.program.slots.get(symbol) ?? -1]?.definition;
+    const words = input === undefined ? undefined : sensitivityWords(input, quantity, sensitivity);
+    return words === undefined ? [] : [{ symbol, words, ppm: sensitivity.ppm }];
+  });
+  if (sentences.length === 0) return null;
   return (
     <div className="mt-3">
       <h3 className="cell-label">Moves with</h3>
       <ul>
-        {entries.map(([symbol, { absolute, ppm }]) => (
+        {sentences.map(({ symbol, words, ppm }) => (
           <li key={symbol}>
-            <code className="figures">{symbol}</code>:{' '}
-            <span className="figures">{formatQuantity(absolute, unit, { significant: 4 })}</span> for each{' '}
-            {unitOf(symbol) === '' ? 'one' : unitOf(symbol)}
-            {ppm === null ? '' : `, ${formatQuantity(ppm, '', { significant: 3 })} ppm per ppm`}
+            {words}
+            {ppm === null ? '.' : `; ${formatQuantity(ppm, '', { significant: 3 })} ppm per ppm.`}
           </li>
         ))}
       </ul>
     </div>
+  );
+}
+
+/** The same in today's units, where the print has others. */
+function InSiUnits({ text }: { text: string }) {
+  const modern = inSi(text);
+  return modern === undefined || modern === text ? null : (
+    <Line label="In SI">
+      <span className="figures">{modern}</span>
+    </Line>
+  );
+}
+
+/** The way to the place that the quantity was taken from, with its box on the scan. */
+function WhereDefined({ quantity: { pageId, zone } }: Pick<LiveQuantity, 'quantity'>) {
+  if (pageId === null || pageId === undefined) return null;
+  const boxes = zone === null || zone === undefined ? '' : `?boxes=${zone.join(',')}`;
+  return (
+    <p className="mt-3">
+      <Link to={`/pages/${pageId}/read${boxes}`} className="word-link">
+        Where it is printed
+      </Link>
+    </p>
   );
 }
 

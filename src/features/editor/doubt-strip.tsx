@@ -3,7 +3,7 @@ import { useEditorState } from '@tiptap/react';
 import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
-import { type Doubt, doubtAt, doubtsOf } from './doubts.ts';
+import { type Doubt, doubtAt, doubtsLike, doubtsOf } from './doubts.ts';
 import type { DoubtWalk } from './use-doubt-walk.ts';
 
 /** The doubts of the page as it stands in the editor, and the one at the caret. */
@@ -61,6 +61,7 @@ export function DoubtStrip({ editor, walk, onKeys }: Props) {
           <Button className="mt-2" look="main" onClick={walk.settle}>
             It is right as it stands
           </Button>
+          <LikeThis editor={editor} walk={walk} here={here} alike={doubtsLike(doubts, here)} />
         </div>
       )}
       <p className="mt-2 text-small text-pencil max-md:hidden">
@@ -71,4 +72,44 @@ export function DoubtStrip({ editor, walk, onKeys }: Props) {
       </p>
     </section>
   );
+}
+
+type LikeProps = { editor: Editor; walk: DoubtWalk; here: Doubt; alike: readonly Doubt[] };
+
+/** The same word in doubt elsewhere on the page: each shown with what stands around it, and all settled at once. */
+function LikeThis({ editor, walk, here, alike }: LikeProps) {
+  if (alike.length < 2) return null;
+  return (
+    <details className="mt-3">
+      <summary className="word-link">{`${alike.length} like this on the page`}</summary>
+      <ol className="my-2 grid max-h-48 gap-1 overflow-y-auto text-small">
+        {alike.map((doubt) => (
+          <li key={doubt.from}>
+            <button type="button" className="word-link text-left" onClick={() => walk.goTo(doubt)}>
+              {around(editor, doubt)}
+            </button>
+          </li>
+        ))}
+      </ol>
+      <div className="flex flex-wrap gap-1">
+        <Button onClick={() => walk.settleAll(alike, null)}>{`All ${alike.length} are right`}</Button>
+        {here.proposals.map((proposal) => (
+          <Button key={proposal} onClick={() => walk.settleAll(alike, proposal)}>
+            All are <span className="figures">{proposal}</span>
+          </Button>
+        ))}
+      </div>
+    </details>
+  );
+}
+
+const lettersAround = 18;
+
+/** The word with some of its line on either side. */
+function around({ state: { doc } }: Editor, { from, to, text }: Doubt): string {
+  const block = doc.resolve(from);
+  const [start, end] = [block.start(), block.end()];
+  const before = doc.textBetween(Math.max(start, from - lettersAround), from, ' ', ' ');
+  const after = doc.textBetween(to, Math.min(end, to + lettersAround), ' ', ' ');
+  return `… ${before}${text}${after} …`;
 }

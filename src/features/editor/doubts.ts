@@ -58,3 +58,7 @@ export function doubtBeside(doubts: readonly Doubt[], position: number, step: 1 
   if (step === 1) return doubts.find(({ from }) => from > position) ?? doubts[0];
   return doubts.findLast(({ to }) => to < position) ?? doubts.at(-1);
 }
+
+/** The doubts that read alike for the same reason, the given one among them: what is right for one is likely right for all. */
+export const doubtsLike = (doubts: readonly Doubt[], { text, reason }: Doubt): Doubt[] =>
+  doubts.filter((each) => each.text === text && each.reason === reason);

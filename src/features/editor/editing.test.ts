@@ -4,7 +4,7 @@ import type { DocNode } from '#shared/document/define-block.ts';
 import { readDocument } from '#shared/document/page-document.ts';
 import { everyKind } from '#src/blocks/every-kind.fixture.ts';
 import { choiceAt, chooseBlock } from './block-kinds.ts';
-import { doubtsOf } from './doubts.ts';
+import { doubtsLike, doubtsOf } from './doubts.ts';
 import { positionOfZone, zoneAtCaret } from './find-zone.ts';
 import { numberAround, printedNumber, putLiveValue } from './printed-number.ts';
 import { keepDoubts } from './settle-doubts.ts';
@@ -47,6 +47,16 @@ describe('a doubt', () => {
     expect(doubtsOf(editor.state.doc)).toHaveLength(1);
     editor.chain().setMeta(keepDoubts, true).setContent(everyKind, { emitUpdate: true }).run();
     expect(doubtsOf(editor.state.doc)).toHaveLength(1);
+  });
+});
+
+describe('doubts that read alike', () => {
+  it('are those of the same text and reason', () => {
+    open();
+    const [doubt] = doubtsOf(editor.state.doc);
+    const twin = { ...doubt!, from: 900, to: 904 };
+    const other = { ...twin, reason: 'another' };
+    expect(doubtsLike([doubt!, twin, other], doubt!)).toEqual([doubt, twin]);
   });
 });
 

@@ -1,6 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { type FormEvent, useState } from 'react';
 import { type Quantity, type QuantityInput, quantityInput } from '#shared/api/quantities.ts';
+import { proposeName } from '#shared/calc/propose-name.ts';
 import { addQuantity } from '#src/api/quantities.ts';
 import type { LiveStore } from '#src/blocks/live-value/live-store.ts';
 import { saidBy } from '#src/lib/said-by.ts';
@@ -8,7 +9,7 @@ import { Button } from '#src/ui/button.tsx';
 import { Field, Select } from '#src/ui/field.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
 import type { PrintedNumber } from './printed-number.ts';
-import { proposeName, type Trial, tryQuantity } from './propose-quantity.ts';
+import { type Trial, tryQuantity } from './propose-quantity.ts';
 
 type Props = {
   store: LiveStore;
@@ -47,8 +48,7 @@ export function NewQuantityForm({ store, manualId, pageId, found, onMade }: Prop
   const taken = store.quantities.some(({ symbol }) => symbol === draft.symbol)
     ? 'Taken by another quantity of this manual.'
     : undefined;
-  const trial: Trial =
-    checked.success && taken === undefined ? tryQuantity(store.quantities, input) : { state: 'incomplete' };
+  const trial: Trial = checked.success && taken === undefined ? tryQuantity(store, input) : { state: 'incomplete' };
   const onSubmit = (event: FormEvent): void => {
     event.preventDefault();
     if (checked.success) add.mutate(input, { onSuccess: onMade });

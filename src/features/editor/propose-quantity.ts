@@ -1,10 +1,8 @@
 import type { Quantity } from '#shared/api/quantities.ts';
 import type { QuantityDefinition } from '#shared/calc/quantity.ts';
-import { builtInTables } from '#shared/calc/channel-plans.ts';
 import { evaluate } from '#shared/calc/evaluate.ts';
 import { compile } from '#shared/calc/program.ts';
 import { proof } from '#shared/calc/proof.ts';
-import { symbolObjection } from '#shared/expressions/names.ts';
 import { findUnit } from '#shared/units/definitions.ts';
 import { formatLikePrinted } from '#shared/units/format-quantity.ts';
 import type { LiveStore } from '#src/blocks/live-value/live-store.ts';
@@ -19,62 +17,19 @@ export function comesOutAs(store: LiveStore, quantity: Quantity, { text, parsed 
   return formatLikePrinted(home, quantity.unit, text) === text;
 }
 
-const emptyWords = new Set([
-  'the',
-  'a',
-  'an',
-  'of',
-  'to',
-  'at',
-  'is',
-  'are',
-  'and',
-  'or',
-  'for',
-  'on',
-  'in',
-  'with',
-  'be',
-  'by',
-  'it',
-  'from',
-  'now',
-  'about',
-]);
-const wordsOfLabel = 3;
-
-/** A label and a symbol from the words ahead of the number: "The first i-f is" gives `firstIF`. Only a proposal. */
-export function proposeName(before: string, taken: readonly string[]): { label: string; symbol: string } {
-  const words = (before.split(/[.;:]/).at(-1) ?? '').match(/[A-Za-z][A-Za-z0-9-]*/g) ?? [];
-  const telling = words.filter((word) => !emptyWords.has(word.toLowerCase())).slice(-wordsOfLabel);
-  const label = telling.join(' ');
-  return {
-    label: label === '' ? '' : label.charAt(0).toUpperCase() + label.slice(1),
-    symbol: freeSymbol(telling, taken),
-  };
-}
-
-function freeSymbol(words: readonly string[], taken: readonly string[]): string {
-  const plain = words.map((word) => word.replaceAll('-', ''));
-  const joined = plain
-    .map((word, at) => (at === 0 ? word.toLowerCase() : word.charAt(0).toUpperCase() + word.slice(1).toLowerCase()))
-    .join('');
-  const base = joined === '' ? 'value' : joined.slice(0, 40);
-  for (let count = 1; ; count += 1) {
-    const symbol = count === 1 ? base : `${base}${count}`;
-    if (!taken.includes(symbol) && symbolObjection(symbol) === undefined) return symbol;
-  }
-}
-
 /** What a new quantity would come to among those of the manual. */
 export type Trial =
   | { state: 'incomplete' }
   | { state: 'problem'; message: string; start?: number; end?: number }
   | { state: 'comes-out'; text: string; agrees: boolean };
 
-export function tryQuantity(quantities: readonly Quantity[], definition: QuantityDefinition): Trial {
+/** `tables` are those that the manual's formulas may look into. */
+export function tryQuantity(
+  { quantities, program: { tables } }: Pick<LiveStore, 'quantities' | 'program'>,
+  definition: QuantityDefinition,
+): Trial {
   if (definition.kind === 'derived' && (definition.expression ?? '').trim() === '') return { state: 'incomplete' };
-  const program = compile([...quantities, definition], builtInTables);
+  const program = compile([...quantities, definition], tables);
   const value = evaluate(program).values[definition.symbol];
   if (value === undefined) return { state: 'incomplete' };
   if (value.problem !== undefined) return { state: 'problem', ...value.problem };

@@ -8,6 +8,8 @@ export type DoubtWalk = {
   goTo: (doubt: Doubt) => void;
   settle: () => void;
   take: (doubt: Doubt, text: string) => void;
+  /** Settles several at once, as they stand or as another text; one undo brings them all back. */
+  settleAll: (doubts: readonly Doubt[], text: string | null) => void;
 };
 
 /** From doubt to doubt. The scan follows, enlarged on the word. */
@@ -55,5 +57,27 @@ export function useDoubtWalk(editor: Editor, showOnScan: (key: string) => void):
     },
     [editor],
   );
-  return { goBeside, goTo, settle, take };
+  const settleAll = useSettleAll(editor);
+  return { goBeside, goTo, settle, take, settleAll };
+}
+
+function useSettleAll(editor: Editor): DoubtWalk['settleAll'] {
+  return useCallback(
+    (doubts, text) => {
+      const mark = editor.schema.marks['doubt'];
+      if (mark === undefined) return;
+      editor
+        .chain()
+        .command(({ tr }) => {
+          // From the end, so that a longer or shorter text does not move those still to be settled.
+          for (const { from, to } of [...doubts].reverse()) {
+            if (text === null) tr.removeMark(from, to, mark);
+            else tr.insertText(text, from, to);
+          }
+          return true;
+        })
+        .run();
+    },
+    [editor],
+  );
 }

@@ -3,13 +3,17 @@ import * as api from '#shared/api/calculations.ts';
 import { type ChangeSheet, type Occurrence, changeSheet } from '#shared/calc/change-sheet.ts';
 import { allNodes, textOf } from '#shared/document/text-of.ts';
 import { existingManual } from '#server/features/manuals/index.ts';
-import { type ApiRouter, serveRaw } from '#server/http/serve.ts';
+import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { pagesWithLiveValues, quantityRows } from './queries.ts';
+import { channelTablesOfManual, pagesWithLiveValues, quantityRows } from './queries.ts';
 import { programOf } from './service.ts';
 
-export function changeSheetRoutes(router: ApiRouter, { db }: Tools): void {
+export function calculationSheetRoutes(router: ApiRouter, { db }: Tools): void {
+  serve(router, api.listChannelTables, ({ params }) => {
+    existingManual(db, params.manualId);
+    return { items: channelTablesOfManual(db, params.manualId), nextCursor: null };
+  });
   serveRaw(router, api.getChangeSheet, ({ params, query, body, response }) => {
     const manual = existingManual(db, params.manualId);
     const sheet = changeSheet(programOf(db, manual.id), occurrencesIn(db, manual.id), body);
