@@ -1,37 +1,27 @@
+import { aeronauticalVhf, distanceX, distanceY, instrumentLanding } from './plans/aeronautical.ts';
+import { fmBroadcast, television } from './plans/broadcast.ts';
+import { maritimeVhf } from './plans/maritime.ts';
+import { citizensBand, familyRadio, generalMobileRepeaters, multiUse, weatherRadio } from './plans/personal-radio.ts';
+import { deepSpace, turnaround } from './plans/spacecraft.ts';
+import { standardIfs, timeStations } from './plans/standards.ts';
 import type { LookupTable } from './tables.ts';
 
-/**
- * Maritime VHF, ITU Radio Regulations, Appendix 18 (cited from memory; the values agree with 47 CFR 80.373(f), 2015, as far as
- * that was read, and with two published channel lists). The published rule, in kHz:
- * ship = 156000 + 50 n for n = 1 to 28, 156025 + 50 (n - 60) for n = 60 to 88; coast = ship + 4600 on duplex channels.
- */
-const simplexChannels = new Set([
-  6, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 67, 68, 69, 70, 71, 72, 73, 74, 75, 76, 77, 87, 88,
-]);
-const duplexSpacingKhz = 4600;
-
-const shipKhz = (channel: number): number => (channel <= 28 ? 156_000 + 50 * channel : 156_025 + 50 * (channel - 60));
-const coastKhz = (channel: number): number => shipKhz(channel) + (simplexChannels.has(channel) ? 0 : duplexSpacingKhz);
-
-const channelsFrom = (first: number, last: number): number[] =>
-  Array.from({ length: last - first + 1 }, (_, at) => first + at);
-
-/** Whole kilohertz until the last division keep every megahertz value the nearest double to its printed digits. */
-export const maritimeVhf: LookupTable = {
-  id: 'maritime-vhf',
-  title: 'VHF maritime mobile band',
-  source: 'ITU Radio Regulations, Appendix 18; 47 CFR 80.373(f)',
-  key: { name: 'channel', unit: '' },
-  columns: [
-    { name: 'ship', unit: 'MHz' },
-    { name: 'coast', unit: 'MHz' },
-  ],
-  rows: [...channelsFrom(1, 28), ...channelsFrom(60, 88)].map((channel) => [
-    channel,
-    shipKhz(channel) / 1000,
-    coastKhz(channel) / 1000,
-  ]),
-};
-
-/** The tables that every manual may look into without bringing them. */
-export const builtInTables: readonly LookupTable[] = [maritimeVhf];
+/** The tables that every manual may look into without bringing them. Rows are made when first looked at. */
+export const builtInTables: readonly LookupTable[] = [
+  maritimeVhf,
+  citizensBand,
+  familyRadio,
+  generalMobileRepeaters,
+  multiUse,
+  weatherRadio,
+  fmBroadcast,
+  television,
+  aeronauticalVhf,
+  instrumentLanding,
+  distanceX,
+  distanceY,
+  deepSpace,
+  turnaround,
+  timeStations,
+  standardIfs,
+];

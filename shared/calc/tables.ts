@@ -9,22 +9,42 @@ export type LookupTable = {
   source: string;
   key: { name: string; unit: string };
   columns: { name: string; unit: string }[];
-  rows: (readonly number[])[];
+  rows: readonly (readonly number[])[];
+  /** What each row stands for, where its key is only a number in a list. */
+  rowNames?: readonly string[];
 };
+
+/** A table whose rows are made when first looked at: a plan by rule costs nothing until a formula uses it. */
+export function lazyTable(
+  head: Omit<LookupTable, 'rows'>,
+  makeRows: () => readonly (readonly number[])[],
+): LookupTable {
+  let rows: readonly (readonly number[])[] | undefined;
+  return {
+    ...head,
+    get rows() {
+      return (rows ??= makeRows());
+    },
+  };
+}
 
 /** The same table for formulas: base units, one step per look. Null where a unit of its heads is unknown. */
 export function viewTable(table: LookupTable): TableView | null {
   const keyUnit = findUnit(table.key.unit);
   if (!keyUnit.ok) return null;
-  const rowOf = new Map(table.rows.map((row, at) => [keyGrain(toBase(row[0] ?? NaN, keyUnit.value)), at]));
+  let rowOf: Map<number, number> | undefined;
+  const findRow = (key: number): number => {
+    rowOf ??= new Map(table.rows.map((row, at) => [keyGrain(toBase(row[0] ?? NaN, keyUnit.value)), at]));
+    return rowOf.get(keyGrain(key)) ?? -1;
+  };
   const columns = new Map<string, TableColumn>();
   for (const [at, { name, unit }] of table.columns.entries()) {
     const found = findUnit(unit);
     if (!found.ok) return null;
-    const values = table.rows.map((row) => toBase(row[at + 1] ?? NaN, found.value));
+    let values: number[] | undefined;
     columns.set(name, {
       dimension: dimensionOf(found.value),
-      read: (key) => values[rowOf.get(keyGrain(key)) ?? -1] ?? NaN,
+      read: (key) => (values ??= table.rows.map((row) => toBase(row[at + 1] ?? NaN, found.value)))[findRow(key)] ?? NaN,
     });
   }
   return {

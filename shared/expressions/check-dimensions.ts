@@ -175,17 +175,22 @@ function checkCall(node: NodeOf<'call'>, scope: ExpressionScope): Checked {
       ),
     );
   }
+  return checkRule(node, first);
+}
+
+/** The first argument against the function's rule; all others have its dimension by now. */
+function checkRule(node: NodeOf<'call'>, first: Dimension): Checked {
   const rule = findFunction(node.name)?.unitRule;
   if (rule === 'root') return succeed(raiseDimension(first, 0.5));
-  if (rule === 'step' && args.length === 1 && !isPlain(first)) {
-    return fail(
-      problemAt(
-        'unit-mismatch',
-        node.place,
-        `To ${node.name} a ${describeDimension(first)}, say to which step, as in ${node.name}(x, 1 kHz)`,
-      ),
-    );
+  if (isPlain(first)) return succeed(first);
+  const { name, place } = node;
+  const kind = describeDimension(first);
+  if (rule === 'plain') {
+    const remedy = 'Divide by a unit first, as in log10(power / (1 mW))';
+    return fail(problemAt('unit-mismatch', place, `${name} takes a plain number, not a ${kind}. ${remedy}`));
   }
+  if (rule === 'step' && node.args.length === 1)
+    return fail(problemAt('unit-mismatch', place, `To ${name} a ${kind}, say to which step, as in ${name}(x, 1 kHz)`));
   return succeed(first);
 }
 

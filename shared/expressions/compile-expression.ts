@@ -50,8 +50,12 @@ const arithmetic: Readonly<Record<ArithmeticOperator, Joined>> = {
 
 /** Two doubles this near, relative to their size, are one printed value: 0.1 + 0.2 == 0.3 must hold on a bench. */
 const sameWithin = 1e-12;
-export const isAbout = (a: number, b: number): boolean =>
-  a === b || Math.abs(a - b) <= sameWithin * Math.max(Math.abs(a), Math.abs(b));
+export const isAbout = (a: number, b: number): boolean => {
+  if (a === b) return true;
+  const gap = Math.abs(a - b);
+  // An infinity is about nothing but itself.
+  return gap < Infinity && gap <= sameWithin * Math.max(Math.abs(a), Math.abs(b));
+};
 const truth = (holds: boolean): number => (holds ? 1 : 0);
 const comparisons: Readonly<Record<ComparisonOperator, Joined>> = {
   '<': (left, right) => (slots) => compare(left(slots), right(slots), (a, b) => a < b && !isAbout(a, b)),

@@ -145,6 +145,9 @@ const absolute: Kernel = ({ registers: r, code: k }, from, to) => {
 const root: Kernel = ({ registers: r, code: k }, from, to) => {
   for (let at = from; at < to; at += 4) r[k[at] ?? 0] = Math.sqrt(r[k[at + 1] ?? 0] ?? 0);
 };
+const log: Kernel = ({ registers: r, code: k }, from, to) => {
+  for (let at = from; at < to; at += 4) r[k[at] ?? 0] = Math.log10(r[k[at + 1] ?? 0] ?? 0);
+};
 const round: Kernel = ({ registers: r, code: k }, from, to) => {
   for (let at = from; at < to; at += 4) {
     const step = r[k[at + 2] ?? 0] ?? 0;
@@ -192,7 +195,7 @@ const lookUp: Kernel = ({ registers: r, code: k, columns }, from, to) => {
 
 // prettier-ignore
 const table = {
-  add, addLast, subtract, subtractLast, multiply, multiplyLast, divide, divideLast, addMultiply, addMultiplyLast, addDivide, addDivideLast, subtractMultiply, subtractMultiplyLast, subtractDivide, subtractDivideLast, multiplyAdd, multiplyAddLast, multiplySubtract, multiplySubtractLast, multiplyDivide, multiplyDivideLast, divideAdd, divideAddLast, divideSubtract, divideSubtractLast, divideMultiply, divideMultiplyLast, power, negate, settle, least, most, absolute, root, round, floor, ceil, compare, choose, needs, lookUp,
+  add, addLast, subtract, subtractLast, multiply, multiplyLast, divide, divideLast, addMultiply, addMultiplyLast, addDivide, addDivideLast, subtractMultiply, subtractMultiplyLast, subtractDivide, subtractDivideLast, multiplyAdd, multiplyAddLast, multiplySubtract, multiplySubtractLast, multiplyDivide, multiplyDivideLast, divideAdd, divideAddLast, divideSubtract, divideSubtractLast, divideMultiply, divideMultiplyLast, power, negate, settle, least, most, absolute, root, log, round, floor, ceil, compare, choose, needs, lookUp,
 } as const;
 export type Operation = keyof typeof table;
 

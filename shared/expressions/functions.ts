@@ -8,7 +8,9 @@ export type UnitRule =
   /** A plain number alone, or any quantity with a step of its own unit. */
   | 'step'
   /** The root of the argument's unit. */
-  | 'root';
+  | 'root'
+  /** A plain number in, a plain number out. */
+  | 'plain';
 export type FunctionDefinition = {
   name: string;
   arity: { least: number; most: number };
@@ -43,6 +45,7 @@ export const functionDefinitions: readonly FunctionDefinition[] = [
   { name: 'ceil', arity: { least: 1, most: 2 }, unitRule: 'step', compute: stepped(Math.ceil), derivative: flat, example: { text: 'ceil(156.61 MHz, 25 kHz)', value: 156.625, unit: 'MHz' } },
   { name: 'abs', arity: { least: 1, most: 1 }, unitRule: 'same', compute: ([value = NaN]) => Math.abs(value), derivative: ([value = NaN], [slope = NaN]) => Math.sign(value) * slope, example: { text: 'abs(145.9 MHz - 156.6 MHz)', value: 10.7, unit: 'MHz' } },
   { name: 'sqrt', arity: { least: 1, most: 1 }, unitRule: 'root', compute: ([value = NaN]) => Math.sqrt(value), derivative: ([value = NaN], [slope = NaN]) => (slope === 0 ? 0 : slope / (2 * Math.sqrt(value))), example: { text: 'sqrt(16 V * 4 V)', value: 8, unit: 'V' } },
+  { name: 'log10', arity: { least: 1, most: 1 }, unitRule: 'plain', compute: ([value = NaN]) => Math.log10(value), derivative: ([value = NaN], [slope = NaN]) => (slope === 0 ? 0 : slope / (value * Math.LN10)), example: { text: '0 dBm + 10 * log10(2 W / (1 mW)) * (1 dB)', value: 33.010299956639813, unit: 'dBm' } },
 ];
 
 const byName = new Map(functionDefinitions.map((each) => [each.name, each]));

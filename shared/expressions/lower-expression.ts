@@ -62,7 +62,8 @@ export function lowerExpression({ root, symbols }: Expression, { code, scope, ow
 /** Operations that choose between settled values, or bring one nearer to zero, leave nothing to settle. */
 const harmless = new Set([codeOf('least'), codeOf('most'), codeOf('absolute'), codeOf('root')]);
 function isSettled(ref: number, code: LoweredCode): boolean {
-  if (ref >= 0) return true;
+  // A folded constant may be infinite.
+  if (ref >= 0) return ref < code.slotCount || Number.isFinite(code.constantValues[ref - code.slotCount]);
   const at = -ref - 1;
   return harmless.has(code.codes[at] ?? -1) && isSettled(code.a[at] ?? -1, code) && isSettled(code.b[at] ?? -1, code);
 }
@@ -184,6 +185,7 @@ const calls: Readonly<Record<string, { operation: Operation; form: 'fold' | 'ste
   ceil: { operation: 'ceil', form: 'step' },
   abs: { operation: 'absolute', form: 'single' },
   sqrt: { operation: 'root', form: 'single' },
+  log10: { operation: 'log', form: 'single' },
 };
 
 function lowerCall({ name, args }: NodeOf<'call'>, lowering: Lowering): number {

@@ -5,6 +5,7 @@ import { compileDerivative } from './compile-derivative.ts';
 import { compileExpression } from './compile-expression.ts';
 import { planCode, placeCode, runPlan } from './flat-code.ts';
 import { scope, slots } from './formula.fixture.ts';
+import { functionDefinitions } from './functions.ts';
 import { lowerExpression, startCode } from './lower-expression.ts';
 import { parseExpression } from './parse-expression.ts';
 import { printExpression } from './print-expression.ts';
@@ -117,7 +118,7 @@ const richTree = fc.letrec<{ node: string }>((tie) => ({
     fc
       .tuple(fc.constantFrom('round', 'floor', 'ceil'), tie('node'), tie('node'))
       .map(([f, a, b]) => `${f}(${a}, ${b})`),
-    fc.tuple(fc.constantFrom('round', 'floor', 'ceil', 'sqrt'), tie('node')).map(([f, a]) => `${f}(${a})`),
+    fc.tuple(fc.constantFrom('round', 'floor', 'ceil', 'sqrt', 'log10'), tie('node')).map(([f, a]) => `${f}(${a})`),
     tie('node').map((a) => `lookup("plan", ${a}, "ship")`),
   ),
 })).node;
@@ -136,6 +137,13 @@ describe('flat code', () => {
       }),
       { numRuns: 10_000 },
     );
+    // Parsing ten thousand formulas takes its time on a busy machine.
+  }, 60_000);
+
+  it.each(functionDefinitions)('knows $name', ({ example }) => {
+    const parsed = parseExpression(example.text);
+    if (!parsed.ok) throw new Error(parsed.error.message);
+    expect(runFlat(parsed.value, slots)).toBe(compileExpression(parsed.value, scope)(slots));
   });
 
   it('agrees with the full mathjs', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { maritimeVhf } from '#shared/calc/channel-plans.ts';
+import { maritimeVhf } from '#shared/calc/plans/maritime.ts';
 import { evaluate } from '#shared/calc/evaluate.ts';
 import { compile } from '#shared/calc/program.ts';
 import { findChannelRule } from './channel-rule.ts';

@@ -30,7 +30,7 @@ function formatNumber(value: number, { decimals, significant }: FormatOptions): 
  * its bare point (`.455 mc`), its letter code (`4K7`), and everything after the number, tolerance included.
  */
 export function formatLikePrinted(value: number, unit: string, printedText: string): string {
-  const parsed = parseQuantity(printedText);
+  const parsed = parsePrinted(printedText);
   if (!parsed.ok || !Number.isFinite(value)) return formatQuantity(value, unit);
   const { layout, unit: printedUnit } = parsed.value;
   const inPrinted = printedUnit === '' ? { ok: true as const, value } : convert(value, unit, printedUnit);
@@ -39,14 +39,42 @@ export function formatLikePrinted(value: number, unit: string, printedText: stri
   return `${printedText.slice(0, layout.start)}${number}${printedText.slice(layout.end)}`;
 }
 
+/** A page writes the same few hundred printed texts anew with every change; reading them took most of the time that it did. */
+const keptReadings = 4000;
+const readings = new Map<string, ReturnType<typeof parseQuantity>>();
+function parsePrinted(text: string): ReturnType<typeof parseQuantity> {
+  const known = readings.get(text);
+  if (known !== undefined) return known;
+  if (readings.size >= keptReadings) readings.clear();
+  const read = parseQuantity(text);
+  readings.set(text, read);
+  return read;
+}
+
 function writeNumber(value: number, parsed: ParsedQuantity): string {
-  const fixed = withoutMinusZero(settle(value).toFixed(parsed.decimals));
-  const [, sign = '', whole = '', point = ''] = /^(-?)(\d+)(.*)$/.exec(fixed) ?? [];
   const { layout, printed } = parsed;
+  const { power } = layout;
+  const shifted = power === undefined ? settle(value) : settle(value).times(`1e${-power.power}`);
+  const fixed = withoutMinusZero(shifted.toFixed(power?.decimals ?? parsed.decimals));
+  const [sign, whole, point] = takeApart(fixed);
   const written = printed.slice(layout.start, layout.end);
   const lead = leadLike(whole, point, layout);
   if (layout.notation === 'letter') return `${sign}${lead}${/\D/.exec(written)?.[0] ?? ''}${point.slice(1)}`;
-  return `${sign === '' && written.startsWith('+') ? '+' : sign}${lead}${point}`;
+  // `455.` keeps its idle point.
+  const end = point === '' && /^[^.]*\d\.(?!\d)/.test(written) ? '.' : point;
+  return `${signLike(sign, written)}${lead}${end}${power?.text ?? ''}`;
+}
+
+function takeApart(fixed: string): [sign: string, whole: string, point: string] {
+  const [, sign = '', whole = '', point = ''] = /^(-?)(\d+)(.*)$/.exec(fixed) ?? [];
+  return [sign, whole, point];
+}
+
+/** The sign as the paper writes it: a plus that it prints, its own kind of minus. */
+function signLike(sign: string, written: string): string {
+  const printedSign = /^[-+\u2212\u2013]\s*/.exec(written)?.[0] ?? '';
+  if (sign === '') return printedSign.startsWith('+') ? printedSign : '';
+  return printedSign === '' || printedSign.startsWith('+') ? sign : printedSign;
 }
 
 function leadLike(whole: string, point: string, { bareDecimalPoint, grouped }: QuantityLayout): string {
@@ -55,6 +83,14 @@ function leadLike(whole: string, point: string, { bareDecimalPoint, grouped }: Q
 }
 
 const withoutMinusZero = (digits: string): string => (/^-0(?:\.0*)?$/.test(digits) ? digits.slice(1) : digits);
+
+/** The quantity as the paper prints it: written anew from what was read, so that a reading that loses something shows. */
+export function printQuantity(parsed: ParsedQuantity): string {
+  const { printed, range, decimalText, unit } = parsed;
+  // The ends of a range may have different units and digits; they are not taken apart again.
+  if (range !== undefined) return printed;
+  return formatLikePrinted(Number(decimalText), unit, printed);
+}
 
 /** Rounds to printed decimals, half away from zero; for comparing with paper. */
 export const roundToDecimals = (value: number, decimals: number): number =>

@@ -4,7 +4,7 @@ import { parseQuantity } from './parse-quantity.ts';
 import type { ParsedQuantity } from './parsed-quantity.ts';
 
 /** Symbols that SI does not know (inches, percent) are not offered, nor those too rare to be read at a glance. */
-const foreign = new Set(['%', 'ppm', 'in', 'cm']);
+const foreign = new Set(['%', 'ppm', 'in', 'cm', 'dBc']);
 
 /** The units of one kind with SI prefixes, smallest first. */
 const scalesOf = (dimension: UnitDefinition['dimension']): UnitDefinition[] =>
@@ -33,7 +33,9 @@ export function inSi(printed: string | ParsedQuantity): string | undefined {
       .times(unit.value.factor)
       .div(scaled.factor)
       .toFixed(Math.max(0, decimals + decimalShift(unit.value, scaled)));
-  const { range, decimals, decimalText } = quantity;
+  const { range, decimalText, layout } = quantity;
+  // 1.5e3 is known to the hundred, not to the unit.
+  const decimals = layout.power === undefined ? quantity.decimals : layout.power.decimals - layout.power.power;
   const number =
     range === undefined
       ? write(decimalText, decimals)
@@ -44,13 +46,16 @@ export function inSi(printed: string | ParsedQuantity): string | undefined {
 /** Inches become millimetres; anything else moves to the prefix that reads best. Levels, percent and plain numbers stay. */
 function scaleOf({ magnitude }: ParsedQuantity, unit: UnitDefinition): UnitDefinition {
   if (['', '%', 'ppm'].includes(unit.symbol) || magnitude === 0) return unit;
+  const millimetre = unit.symbol === 'in' ? findUnit('mm') : undefined;
+  if (millimetre?.ok === true) return millimetre.value;
+  if (unit.dimension.includes('level')) return unit;
   const base = new ExactDecimal(magnitude).times(unit.factor).toNumber();
   return readableUnit(base, unit.dimension) ?? unit;
 }
 
-/** How many decimals more the same digits need in the other unit. */
+/** How many decimals more the same digits need in the other unit; an inch is 25.4 mm, one more. */
 const decimalShift = (from: UnitDefinition, to: UnitDefinition): number =>
-  Math.ceil(Math.log10(Number(to.factor) / Number(from.factor)) - 1e-9);
+  from.symbol === 'in' ? 1 : Math.ceil(Math.log10(Number(to.factor) / Number(from.factor)) - 1e-9);
 
 function toleranceInSi({ tolerance, unit }: ParsedQuantity): string {
   if (tolerance === undefined) return '';

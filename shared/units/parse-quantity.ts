@@ -3,6 +3,7 @@ import { findUnit, type UnitProblem } from './definitions.ts';
 import { quantityOf, type Head, type ParsedQuantity, type QuantityProblem } from './parsed-quantity.ts';
 import { readTolerance, type QuantityTolerance } from './parse-tolerance.ts';
 import { aboutPattern, readNumber, readUnit, skipRemarks, type NumberText } from './quantity-text.ts';
+import { readDeviation } from './read-deviation.ts';
 import { readLetterCode } from './read-letter-code.ts';
 import { readRange } from './read-range.ts';
 
@@ -27,6 +28,8 @@ export function parseQuantity(printed: string): Result<ParsedQuantity, QuantityP
 
 /** The number, or both numbers of a range, and the unit. */
 function readHead(printed: string): Result<Head, QuantityProblem> {
+  const deviation = readDeviation(printed);
+  if (deviation !== undefined) return succeed(deviation);
   const start = startOfNumber(printed);
   const code = readLetterCode(printed, start);
   if (code !== undefined) return succeed(code);

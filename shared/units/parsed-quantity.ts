@@ -1,5 +1,5 @@
 import type { QuantityTolerance } from './parse-tolerance.ts';
-import type { NumberText } from './quantity-text.ts';
+import type { NumberText, PrintedPower } from './quantity-text.ts';
 
 export type QuantityProblem = {
   code: 'not-a-quantity' | 'unknown-unit' | 'ambiguous-unit' | 'not-understood';
@@ -26,13 +26,14 @@ export type QuantityLayout = {
   notation: 'decimal' | 'letter' | 'range';
   grouped: boolean;
   bareDecimalPoint: boolean;
+  power?: PrintedPower;
 };
 
 /** The quantity without its tail, and the tail still to be read. */
 export type Head = { head: ParsedQuantity; rest: string };
 
 export function quantityOf(number: NumberText, unit: string, printed: string): ParsedQuantity {
-  const { decimalText, decimals, start, end, grouped } = number;
+  const { decimalText, decimals, start, end, grouped, power } = number;
   const bareDecimalPoint = /^[^\d.]*\./.test(printed.slice(start, end));
   return {
     magnitude: Number(decimalText),
@@ -40,6 +41,13 @@ export function quantityOf(number: NumberText, unit: string, printed: string): P
     unit,
     decimals,
     printed,
-    layout: { start, end, notation: 'decimal', grouped, bareDecimalPoint },
+    layout: {
+      start,
+      end,
+      notation: 'decimal',
+      grouped,
+      bareDecimalPoint,
+      ...(power === undefined ? {} : { power }),
+    },
   };
 }

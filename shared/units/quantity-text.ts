@@ -14,7 +14,16 @@ const signPattern = /^[-\u2212\u2013+]\s*(?=[\d.])/;
 const unitPattern =
   /^(?:per\s+cent|micro-micro[a-z]+|[A-Za-z\u00B5\u03BC\u03A9\u03C9\u2126\u00B0\u2103\u2109]+(?:\/(?:s(?:ec)?|m)(?![A-Za-z]))?|%)/i;
 
-export type NumberText = { decimalText: string; decimals: number; grouped: boolean; start: number; end: number };
+export type NumberText = {
+  decimalText: string;
+  decimals: number;
+  grouped: boolean;
+  start: number;
+  end: number;
+  /** A power of ten as printed (`e3`, ` x 10^-6`), and the digits after the point before it. */
+  power?: PrintedPower;
+};
+export type PrintedPower = { text: string; power: number; decimals: number };
 
 /** Reads a signed number at the start of `text`; `offset` is where `text` begins in the printed whole. */
 export function readNumber(text: string, offset: number): NumberText | undefined {
@@ -28,6 +37,15 @@ export function readNumber(text: string, offset: number): NumberText | undefined
   return {
     decimalText: `${negative ? '-' : ''}${plain.startsWith('.') ? '0' : ''}${plain.replace(/\.$/, '')}${exponent}`,
     decimals: Math.max(0, (point < 0 ? 0 : plain.length - point - 1) - Number(exponent.slice(1))),
+    ...(exponent === ''
+      ? {}
+      : {
+          power: {
+            text: text.slice(sign.length + digits.length, sign.length + digits.length + length),
+            power: Number(exponent.slice(1)),
+            decimals: point < 0 ? 0 : plain.length - point - 1,
+          },
+        }),
     grouped: digits.includes(','),
     start: offset,
     end: offset + sign.length + digits.length + length,

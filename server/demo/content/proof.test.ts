@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { builtInTables, maritimeVhf } from '#shared/calc/channel-plans.ts';
+import { builtInTables } from '#shared/calc/channel-plans.ts';
+import { maritimeVhf } from '#shared/calc/plans/maritime.ts';
 import { compile } from '#shared/calc/program.ts';
 import { evaluate } from '#shared/calc/evaluate.ts';
 import { checkPlan } from '#shared/plan/check-plan.ts';

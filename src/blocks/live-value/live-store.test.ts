@@ -26,6 +26,21 @@ describe('the values of a manual at a setting', () => {
     expect(store.read('crystal')).not.toBe(crystal);
   });
 
+  it('are only made anew where going home, or taking a setting, changes them', () => {
+    const store = storeAt({ channel: 16 });
+    const [crystal, second] = [store.read('crystal'), store.read('second_if')];
+    store.backToHome();
+    expect(store.read('second_if')).toBe(second);
+    expect(store.read('crystal')).not.toBe(crystal);
+    store.takeSetting({ channel: 12 });
+    const home = store.read('crystal');
+    store.takeSetting({ channel: 16 });
+    expect(store.read('second_if')).toBe(second);
+    expect(store.read('crystal')).toEqual(crystal);
+    store.takeSetting({});
+    expect(store.read('crystal')).toEqual(home);
+  });
+
   it('never show a stale number behind a refused input', () => {
     const store = storeAt();
     store.set('channel', 99);

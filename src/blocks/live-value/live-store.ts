@@ -86,15 +86,17 @@ export function createLiveStore(given: Given): LiveStore {
     setting: () => setting,
     set: (symbol, value) => changed(set(symbol, value)),
     backToHome: (symbol) => {
-      setting =
-        symbol === undefined ? {} : Object.fromEntries(Object.entries(setting).filter(([each]) => each !== symbol));
-      changed([...session.reset(symbol).changed, ...Object.keys(home)]);
+      const left = symbol === undefined ? Object.keys(setting) : [symbol];
+      setting = Object.fromEntries(Object.entries(setting).filter(([each]) => !left.includes(each)));
+      // Only what differs is drawn again: on a page of a thousand values most stand still.
+      changed([...session.reset(symbol).changed, ...left]);
     },
     takeSetting: (next) => {
+      const left = Object.keys(setting);
       setting = {};
-      session.reset();
-      for (const [symbol, value] of Object.entries(next)) set(symbol, value);
-      changed(Object.keys(home));
+      const symbols = [...left, ...session.reset().changed];
+      for (const [symbol, value] of Object.entries(next)) symbols.push(...set(symbol, value));
+      changed(symbols);
     },
     evaluate: (options) => evaluate(program, setting, options),
     subscribe: (listener) => {

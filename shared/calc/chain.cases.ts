@@ -1,0 +1,141 @@
+/**
+ * Published worked values of frequency chains, levels and modulation. Everything is in base units and plain numbers; `unit` says
+ * which. Where a source prints a value, that is what is expected, to half of its last digit; else the law itself is the source.
+ */
+export const chainSources = {
+  ncvec4: 'NCVEC Element 4 (Amateur Extra) question pool 2016-2020, public domain',
+  ncvec3: 'NCVEC Element 3 (General) question pool 2019-2023, public domain',
+  nemb: 'Textbook law (definition or algebra)',
+  ncvec2: 'NCVEC Element 2 (Technician) question pool 2018-2022, public domain',
+  adf4150hv: 'Analog Devices ADF4150HV data sheet Rev. 0, p. 20, "RF synthesizer - a worked example"',
+  friis1: 'Calculator site worked example: LNA 1.5 dB/20 dB, mixer 10 dB/15 dB, IF 15 dB -> 1.80 dB',
+  friis2: 'Tutorial worked example: filter, LNA, filter, mixer -> F 2.414, 3.83 dB; sensitivity -101.2 dBm',
+  oldradios: 'oldradios.co.za "Superhet tracking - padder and trimmer"',
+  'usb-pairs':
+    'Public compilation of Unified S-Band parameters: 2106.40625 up / 2287.5 down; 2101.802 up / 2282.5 down',
+  ulysses:
+    'J. D. Anderson et al., "Study of the anomalous acceleration of Pioneer 10 and 11" (2001), Ulysses link: 2111.607 MHz up, 2293.148 MHz down, factor 240/221, X-band factor 880/221',
+  tdm: 'CCSDS Tracking Data Messages for Cassini: TURNAROUND_NUMERATOR 880, TURNAROUND_DENOMINATOR 749 (X up, X down)',
+  cfr2_202:
+    '47 CFR 2.202(b), (e), (f), (g): necessary bandwidth notation, terms and sample calculations, 2015 annual edition',
+  iaru: 'IARU Region 1 Technical Recommendation R.1 (S-meter calibration)',
+  cfr73_682:
+    '47 CFR 73.682(a), analogue TV transmission standards: visual carrier 1.25 MHz above lower edge, aural 4.5 MHz above visual, chrominance subcarrier 63/88 x 5 MHz, line 2/455 of it (15,734.264 Hz), field 59.94 Hz; 2015 annual edition',
+  practice: 'Common practice, no source',
+  si: 'SI definition (exact)',
+} as const;
+
+export type ChainCase = {
+  what: string;
+  expression: string;
+  given: Readonly<Record<string, number>>;
+  expected: number;
+  tolerance: number;
+  unit: string;
+  source: keyof typeof chainSources;
+  standing: 'seen' | 'secondary' | 'memory' | 'derived' | 'practice';
+};
+const published = (
+  what: string,
+  formula: Pick<ChainCase, 'expression' | 'given'>,
+  value: Omit<ChainCase, 'what' | 'expression' | 'given'>,
+): ChainCase => ({ what, ...formula, ...value });
+
+// prettier-ignore
+export const chainCases: readonly ChainCase[] = [
+  published('C01: NCVEC E4C14 image, 14.300 MHz, IF 455 kHz', { expression: 'fs+2*fif', given: { fs: 14300000, fif: 455000 } }, { expected: 15210000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C01b: Other image of the same receiver (low-side oscillator)', { expression: 'fs-2*fif', given: { fs: 14300000, fif: 455000 } }, { expected: 13390000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'secondary' }),
+  published('C02: NCVEC G8B02: 14.255 - 13.800 MHz gives the IF', { expression: 'a-b', given: { a: 14255000, b: 13800000 } }, { expected: 455000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C03: NCVEC G8B02: image at 13.345 MHz', { expression: 'fs-2*fif', given: { fs: 14255000, fif: 455000 } }, { expected: 13345000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C04: NCVEC G8B07: deviation at the oscillator', { expression: 'dev*fosc/fout', given: { dev: 5000, fosc: 12210000, fout: 146520000 } }, { expected: 416.7, tolerance: 0.05, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C04b: Multiplication factor in G8B07', { expression: 'a/b', given: { a: 146520000, b: 12210000 } }, { expected: 12.0, tolerance: 1e-09, unit: '1', source: 'ncvec3', standing: 'seen' }),
+  published('C05: NCVEC G8B06: Carson bandwidth', { expression: '2*(dev+fm)', given: { dev: 5000, fm: 3000 } }, { expected: 16000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C06: NCVEC E4B03: 1.0 ppm at 146.52 MHz', { expression: 'f*ppm*1e-6', given: { f: 146520000, ppm: 1 } }, { expected: 146.52, tolerance: 0.0001, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C07: NCVEC E4B04: 0.1 ppm', { expression: 'f*ppm*1e-6', given: { f: 146520000, ppm: 0.1 } }, { expected: 14.652, tolerance: 0.0001, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C08: NCVEC E4B05: 10 ppm', { expression: 'f*ppm*1e-6', given: { f: 146520000, ppm: 10 } }, { expected: 1465.2, tolerance: 0.001, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C09: NCVEC E4D05: interfering transmitter, first answer', { expression: '2*f1-fr', given: { fr: 146700000, f1: 146520000 } }, { expected: 146340000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C10: NCVEC E4D05: second answer', { expression: '(fr+f1)/2', given: { fr: 146700000, f1: 146520000 } }, { expected: 146610000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C11: NCVEC E5A11 bandwidth 7.1 MHz, Q 150', { expression: 'f/Q', given: { f: 7100000, Q: 150 } }, { expected: 47300.0, tolerance: 50, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C12: NCVEC E5A12 bandwidth 3.7 MHz, Q 118', { expression: 'f/Q', given: { f: 3700000, Q: 118 } }, { expected: 31400.0, tolerance: 50, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C13: NCVEC E5A14 resonance 50 uH, 40 pF', { expression: '1/(2*pi*sqrt(L*C))', given: { L: 5e-05, C: 4e-11 } }, { expected: 3560000.0, tolerance: 5000, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C14: NCVEC E5A16 resonance 50 uH, 10 pF', { expression: '1/(2*pi*sqrt(L*C))', given: { L: 5e-05, C: 1e-11 } }, { expected: 7120000.0, tolerance: 5000, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C15: NCVEC E4C06 noise floor, 400 Hz', { expression: 'n0+10*log10(bw)', given: { n0: -174, bw: 400 } }, { expected: -148.0, tolerance: 0.5, unit: 'dBm', source: 'ncvec4', standing: 'seen' }),
+  published('C16: NCVEC E8B05 deviation ratio', { expression: 'a/b', given: { a: 5000, b: 3000 } }, { expected: 1.67, tolerance: 0.005, unit: '1', source: 'ncvec4', standing: 'seen' }),
+  published('C17: NCVEC E8B06 deviation ratio', { expression: 'a/b', given: { a: 7500, b: 3500 } }, { expected: 2.14, tolerance: 0.005, unit: '1', source: 'ncvec4', standing: 'seen' }),
+  published('C18: NCVEC E8B03 modulation index', { expression: 'a/b', given: { a: 3000, b: 1000 } }, { expected: 3.0, tolerance: 1e-09, unit: '1', source: 'ncvec4', standing: 'seen' }),
+  published('C19: NCVEC E8C05 necessary bandwidth 13 WPM', { expression: '0.8*wpm*K', given: { wpm: 13, K: 5 } }, { expected: 52.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C20: NCVEC E8C06 170 Hz shift, 300 baud', { expression: 'baud+1.2*shift', given: { baud: 300, shift: 170 } }, { expected: 500.0, tolerance: 5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C21: NCVEC E8C07 4800 Hz shift, 9600 baud', { expression: 'baud+1.2*shift', given: { baud: 9600, shift: 4800 } }, { expected: 15360.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'seen' }),
+  published('C22: NCVEC E9A15 ERP 150 W, 4.2 dB loss, 7 dBd', { expression: 'P*10^((gain-loss)/10)', given: { P: 150, loss: 4.2, gain: 7 } }, { expected: 286.0, tolerance: 0.5, unit: 'W', source: 'ncvec4', standing: 'seen' }),
+  published('C23: NCVEC E9A16 ERP 200 W, 8 dB loss, 10 dBd', { expression: 'P*10^((gain-loss)/10)', given: { P: 200, loss: 8, gain: 10 } }, { expected: 317.0, tolerance: 0.5, unit: 'W', source: 'ncvec4', standing: 'seen' }),
+  published('C24: NCVEC E9A17 EIRP 200 W, 6 dB loss, 7 dBi', { expression: 'P*10^((gain-loss)/10)', given: { P: 200, loss: 6, gain: 7 } }, { expected: 252.0, tolerance: 0.5, unit: 'W', source: 'ncvec4', standing: 'seen' }),
+  published('C25: NCVEC E9A12 6 dBi in dBd', { expression: 'g-2.15', given: { g: 6 } }, { expected: 3.85, tolerance: 0.001, unit: 'dB', source: 'ncvec4', standing: 'seen' }),
+  published('C26: NCVEC E9A13 12 dBi in dBd', { expression: 'g-2.15', given: { g: 12 } }, { expected: 9.85, tolerance: 0.001, unit: 'dB', source: 'ncvec4', standing: 'seen' }),
+  published('C27: NCVEC E4B06 power absorbed, 100 W forward 25 W reflected', { expression: 'a-b', given: { a: 100, b: 25 } }, { expected: 75.0, tolerance: 1e-09, unit: 'W', source: 'ncvec4', standing: 'seen' }),
+  published('C27b: SWR of C27', { expression: '(1+sqrt(Pr/Pf))/(1-sqrt(Pr/Pf))', given: { Pf: 100, Pr: 25 } }, { expected: 3, tolerance: 4e-12, unit: '1', source: 'nemb', standing: 'derived' }),
+  published('C28: NCVEC G9A09 SWR 200 ohm on 50', { expression: 'max(Z0,R)/min(Z0,R)', given: { Z0: 50, R: 200 } }, { expected: 4.0, tolerance: 1e-09, unit: '1', source: 'ncvec3', standing: 'seen' }),
+  published('C29: NCVEC G9A10 SWR 10 ohm on 50', { expression: 'max(Z0,R)/min(Z0,R)', given: { Z0: 50, R: 10 } }, { expected: 5.0, tolerance: 1e-09, unit: '1', source: 'ncvec3', standing: 'seen' }),
+  published('C30: NCVEC G5B06 PEP, 200 V p-p in 50 ohm', { expression: '(Vpp/2/sqrt(2))^2/R', given: { Vpp: 200, R: 50 } }, { expected: 100.0, tolerance: 1e-06, unit: 'W', source: 'ncvec3', standing: 'seen' }),
+  published('C31: NCVEC G5B14 PEP, 500 V p-p in 50 ohm', { expression: '(Vpp/2/sqrt(2))^2/R', given: { Vpp: 500, R: 50 } }, { expected: 625.0, tolerance: 1e-06, unit: 'W', source: 'ncvec3', standing: 'seen' }),
+  published('C32: NCVEC G5B12 rms voltage, 1200 W in 50 ohm', { expression: 'sqrt(P*R)', given: { P: 1200, R: 50 } }, { expected: 245.0, tolerance: 0.5, unit: 'V', source: 'ncvec3', standing: 'seen' }),
+  published('C33: NCVEC G5B10 power lost for 1 dB', { expression: '100*(1-10^(-dB/10))', given: { dB: 1 } }, { expected: 20.6, tolerance: 0.05, unit: '%', source: 'ncvec3', standing: 'seen' }),
+  published('C34: NCVEC G4D05 20 dB as a power ratio', { expression: '1e-3*10^(dbm/10)', given: { dbm: 50 } }, { expected: 100.0, tolerance: 1e-09, unit: 'W', source: 'ncvec3', standing: 'seen' }),
+  published('C35: NCVEC T5B10 12 W to 3 W in dB', { expression: '10*log10(a/b)', given: { a: 3, b: 12 } }, { expected: -6.0, tolerance: 0.05, unit: 'dB', source: 'ncvec2', standing: 'seen' }),
+  published('C36: NCVEC T5B11 20 W to 200 W in dB', { expression: '10*log10(a/b)', given: { a: 200, b: 20 } }, { expected: 10.0, tolerance: 1e-09, unit: 'dB', source: 'ncvec2', standing: 'seen' }),
+  published('C37: NCVEC T5B09 5 W to 10 W in dB', { expression: '10*log10(a/b)', given: { a: 10, b: 5 } }, { expected: 3.0, tolerance: 0.05, unit: 'dB', source: 'ncvec2', standing: 'seen' }),
+  published('C38: NCVEC G4D08 LSB lower edge, 7.178 MHz, 3 kHz', { expression: 'a-b', given: { a: 7178000, b: 3000 } }, { expected: 7175000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C39: NCVEC G4D09 USB upper edge, 14.347 MHz, 3 kHz', { expression: 'a+b', given: { a: 14347000, b: 3000 } }, { expected: 14350000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec3', standing: 'seen' }),
+  published('C40: Data-sheet fractional-N example: 1500.5 MHz', { expression: 'fpfd*(N+FRAC/MOD)/div', given: { N: 120, FRAC: 1, MOD: 25, fpfd: 25000000, div: 2 } }, { expected: 1500500000.0, tolerance: 0.5, unit: 'Hz', source: 'adf4150hv', standing: 'seen' }),
+  published('C41: Same example: modulus', { expression: 'a/b', given: { a: 25000000, b: 1000000 } }, { expected: 25.0, tolerance: 1e-09, unit: '1', source: 'adf4150hv', standing: 'seen' }),
+  published('C42: Friis, three stages', { expression: '10*log10(10^(f1/10)+(10^(f2/10)-1)/10^(g1/10)+(10^(f3/10)-1)/10^((g1+g2)/10))', given: { f1: 1.5, g1: 20, f2: 10, g2: 15, f3: 15 } }, { expected: 1.8, tolerance: 0.005, unit: 'dB', source: 'friis1', standing: 'secondary' }),
+  published('C43: Friis, four stages', { expression: '10*log10(10^(f1/10)+(10^(f2/10)-1)/10^(g1/10)+(10^(f3/10)-1)/10^((g1+g2)/10)+(10^(f4/10)-1)/10^((g1+g2+g3)/10))', given: { f1: 2, g1: -2, f2: 1.5, g2: 18, f3: 1, g3: -1, f4: 8 } }, { expected: 3.83, tolerance: 0.005, unit: 'dB', source: 'friis2', standing: 'secondary' }),
+  published('C44: Sensitivity of C43, 10 MHz, SNR -1 dB', { expression: '-174+nf+10*log10(bw)+snr', given: { nf: 3.83, bw: 10000000, snr: -1 } }, { expected: -101.2, tolerance: 0.05, unit: 'dBm', source: 'friis2', standing: 'secondary' }),
+  published('C45: Superhet oscillator for 1.422 MHz, IF 0.455 MHz', { expression: 'fs+fif', given: { fs: 1422000, fif: 455000 } }, { expected: 1877000.0, tolerance: 0.5, unit: 'Hz', source: 'oldradios', standing: 'secondary' }),
+  published('C46: coherent S-band downlink of a published pair', { expression: 'f*num/den', given: { f: 2106406250, num: 240, den: 221 } }, { expected: 2287500000.0, tolerance: 0.5, unit: 'Hz', source: 'usb-pairs', standing: 'secondary' }),
+  published('C47: Ulysses X downlink from S uplink channel 9', { expression: 'f*num/den', given: { f: 2111607292, num: 880, den: 221 } }, { expected: 8408210031.493213, tolerance: 0.00840821, unit: 'Hz', source: 'ulysses', standing: 'derived' }),
+  published('C48: Deep-space channel 14 X up to X down', { expression: 'f*num/den', given: { f: 7162312500, num: 880, den: 749 } }, { expected: 8415000000.0, tolerance: 0.5, unit: 'Hz', source: 'tdm', standing: 'derived' }),
+  published('B01: 47 CFR 2.202(g): A1A, 25 WPM fading', { expression: 'B*K+2*M', given: { B: 20, K: 5, M: 0 } }, { expected: 100.0, tolerance: 1e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B02: 47 CFR 2.202(g): A2A, 25 WPM, 1000 Hz tone', { expression: 'B*K+2*M', given: { B: 20, K: 5, M: 1000 } }, { expected: 2100.0, tolerance: 2.1e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B03: 47 CFR 2.202(g): J2B, 50 Bd, 70 Hz shift', { expression: '2*M+2*D*K', given: { M: 25, D: 35, K: 1.2 } }, { expected: 134.0, tolerance: 1e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B04: 47 CFR 2.202(g): R7B, 15 channels', { expression: 'c+M+D*K', given: { c: 2805, M: 50, D: 42.5, K: 0.7 } }, { expected: 2885.0, tolerance: 0.5, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B05: 47 CFR 2.202(g): A3E telephony', { expression: 'B*K+2*M', given: { B: 0, K: 0, M: 3000 } }, { expected: 6000.0, tolerance: 6e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B06: 47 CFR 2.202(g): J3E telephony', { expression: 'N*M-lo', given: { N: 1, M: 3000, lo: 300 } }, { expected: 2700.0, tolerance: 2.7e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B07: 47 CFR 2.202(g): J8E two channels', { expression: 'N*M-lo', given: { N: 2, M: 3000, lo: 250 } }, { expected: 5750.0, tolerance: 5.75e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B08: 47 CFR 2.202(g): J3E broadcasting', { expression: 'N*M-lo', given: { N: 1, M: 4500, lo: 50 } }, { expected: 4450.0, tolerance: 4.45e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B09: 47 CFR 2.202(g): A8W television relay', { expression: '2*C+2*M+2*D', given: { C: 6500000, M: 15000, D: 50000 } }, { expected: 13130000.0, tolerance: 0.5, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B10: 47 CFR 2.202(g): A9W VOR with voice', { expression: '2*C+2*M+2*D', given: { C: 9960, M: 30, D: 480 } }, { expected: 20940.0, tolerance: 0.5, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B11: 47 CFR 2.202(g): F1B 100 Bd, 170 Hz shift', { expression: '2*M+2*D*K', given: { M: 50, D: 85, K: 1.2 } }, { expected: 304.0, tolerance: 1e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B12: 47 CFR 2.202(g): F7B four-frequency', { expression: '2*M+2*D*K', given: { M: 50, D: 600, K: 1.1 } }, { expected: 1420.0, tolerance: 1.42e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B13: 47 CFR 2.202(g): F3E telephony', { expression: '2*M+2*D*K', given: { M: 3000, D: 5000, K: 1 } }, { expected: 16000.0, tolerance: 1.6e-08, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B14: 47 CFR 2.202(g): F3E sound broadcasting', { expression: '2*M+2*D*K', given: { M: 15000, D: 75000, K: 1 } }, { expected: 180000.0, tolerance: 1.8e-07, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B15: 47 CFR 2.202(g): F1C facsimile', { expression: '2*M+2*D*K', given: { M: 550, D: 400, K: 1.1 } }, { expected: 1980.0, tolerance: 1.98e-09, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B16: 47 CFR 2.202(g): 60-channel relay deviation', { expression: 'd*a*b', given: { d: 200000, a: 3.76, b: 1.19 } }, { expected: 895000.0, tolerance: 500, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B17: 47 CFR 2.202(g): 60-channel relay bandwidth', { expression: '2*M+2*D*K', given: { M: 331000, D: 895000, K: 1 } }, { expected: 2452000.0, tolerance: 500, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B18: 47 CFR 2.202(g): 1200-channel relay bandwidth', { expression: '2*M+2*D*K', given: { M: 5564000, D: 2730000, K: 1 } }, { expected: 16590000.0, tolerance: 5000, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('B19: 47 CFR 2.202(g): Unmodulated pulse, 1 us, K 1.5', { expression: '2*K/t', given: { K: 1.5, t: 1e-06 } }, { expected: 3000000.0, tolerance: 3e-06, unit: 'Hz', source: 'cfr2_202', standing: 'seen' }),
+  published('C50: 1 microvolt in 50 ohm', { expression: '10*log10(V^2/R/1e-3)', given: { V: 1e-06, R: 50 } }, { expected: -107.0, tolerance: 0.05, unit: 'dBm', source: 'nemb', standing: 'derived' }),
+  published('C51: 0 dBm in 50 ohm', { expression: 'sqrt(1e-3*10^(dbm/10)*R)', given: { dbm: 0, R: 50 } }, { expected: 0.2236, tolerance: 5e-05, unit: 'V', source: 'nemb', standing: 'derived' }),
+  published('C52: dBuV minus dBm in 50 ohm', { expression: '10*log10(R)+90', given: { R: 50 } }, { expected: 106.99, tolerance: 0.005, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C53: dBuV minus dBm in 75 ohm', { expression: '10*log10(R)+90', given: { R: 75 } }, { expected: 108.75, tolerance: 0.005, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C54: S9 below 30 MHz: 50 uV in 50 ohm', { expression: '10*log10(V^2/R/1e-3)', given: { V: 5e-05, R: 50 } }, { expected: -73.0, tolerance: 0.05, unit: 'dBm', source: 'iaru', standing: 'memory' }),
+  published('C55: S9 above 30 MHz: 5 uV in 50 ohm', { expression: '10*log10(V^2/R/1e-3)', given: { V: 5e-06, R: 50 } }, { expected: -93.0, tolerance: 0.05, unit: 'dBm', source: 'iaru', standing: 'memory' }),
+  published('C56: Return loss at SWR 1.5', { expression: '-20*log10((swr-1)/(swr+1))', given: { swr: 1.5 } }, { expected: 13.98, tolerance: 0.005, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C57: Return loss at SWR 2', { expression: '-20*log10((swr-1)/(swr+1))', given: { swr: 2 } }, { expected: 9.54, tolerance: 0.005, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C58: Mismatch loss at SWR 2', { expression: '-10*log10(1-((swr-1)/(swr+1))^2)', given: { swr: 2 } }, { expected: 0.51, tolerance: 0.005, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C59: Noise temperature at NF 3 dB', { expression: '290*(10^(nf/10)-1)', given: { nf: 3 } }, { expected: 288.6, tolerance: 0.05, unit: 'K', source: 'nemb', standing: 'derived' }),
+  published('C60: Multiplied oscillator error: 8.1 MHz crystal x 18, 5 ppm', { expression: 'fx*M*ppm*1e-6', given: { fx: 8100000, M: 18, ppm: 5 } }, { expected: 729, tolerance: 7.3e-10, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C61: Receive crystal, 156.8 MHz, IF 10.7 MHz, low side, x 9', { expression: '(frx+side*fif)/M', given: { frx: 156800000, fif: 10700000, M: 9, side: -1 } }, { expected: 16233333.333333334, tolerance: 1.62333e-05, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C62: Receive crystal, 27.065 MHz, IF 455 kHz, low side, x 1', { expression: '(frx+side*fif)/M', given: { frx: 27065000, fif: 455000, M: 1, side: -1 } }, { expected: 26610000.0, tolerance: 0.5, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C63: Inverse of C61', { expression: 'fx*M-side*fif', given: { fx: 16233333.333333334, M: 9, fif: 10700000, side: -1 } }, { expected: 156800000.0, tolerance: 0.5, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C64: Half-IF response, high-side oscillator, 146 MHz, IF 10.7 MHz', { expression: 'fs+fif/2', given: { fs: 146000000, fif: 10700000 } }, { expected: 151350000, tolerance: 0.00015135, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C65: Check of C64 by 2 LO - 2 RF', { expression: 'abs(m*a+n*b)', given: { m: 2, n: -2, a: 156700000, b: 151350000 } }, { expected: 10700000.0, tolerance: 0.5, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C66: Dual-modulus count P 8, B 1466, A 5, 12.5 kHz', { expression: '(P*B+A)*fpfd', given: { P: 8, B: 1466, A: 5, fpfd: 12500 } }, { expected: 146662500, tolerance: 0.000146663, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C67: Divider for 146.520 MHz in 5 kHz steps', { expression: 'fout/fref', given: { fout: 146520000, fref: 5000 } }, { expected: 29304.0, tolerance: 1e-06, unit: '1', source: 'nemb', standing: 'derived' }),
+  published('C68: Phase-noise rise through a x 18 multiplier', { expression: '20*log10(N)', given: { N: 18 } }, { expected: 25.1, tolerance: 0.05, unit: 'dB', source: 'nemb', standing: 'derived' }),
+  published('C69: TV channel 2 oscillator', { expression: 'v+i', given: { v: 55250000, i: 45750000 } }, { expected: 101000000.0, tolerance: 0.5, unit: 'Hz', source: 'cfr73_682', standing: 'memory' }),
+  published('C70: Military guard as second harmonic of 121.5 MHz', { expression: 'a*b', given: { a: 2, b: 121500000 } }, { expected: 243000000.0, tolerance: 0.5, unit: 'Hz', source: 'practice', standing: 'practice' }),
+  published('C71: 1 W in dBm', { expression: '10*log10(P/1e-3)', given: { P: 1 } }, { expected: 30.0, tolerance: 1e-09, unit: 'dBm', source: 'nemb', standing: 'derived' }),
+  published('C72: Wavelength at 14.1 MHz', { expression: '299792458/f', given: { f: 14100000 } }, { expected: 21.261876453900708, tolerance: 2.22619e-11, unit: 'm', source: 'si', standing: 'derived' }),
+  published('C73: Second-order sum of 7.0 and 7.1 MHz', { expression: 'abs(m*a+n*b)', given: { m: 1, n: 1, a: 7000000, b: 7100000 } }, { expected: 14100000.0, tolerance: 0.5, unit: 'Hz', source: 'nemb', standing: 'derived' }),
+  published('C74: Third-order 2 f1 - f2', { expression: '2*f1-f2', given: { f1: 146610000, f2: 146520000 } }, { expected: 146700000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'derived' }),
+];
