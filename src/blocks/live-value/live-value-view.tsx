@@ -1,7 +1,15 @@
 import { Popover } from '#src/ui/popover.tsx';
+import { inSi } from '#shared/units/in-si.ts';
 import type { Zone } from '#shared/document/define-block.ts';
 import { zoneKey } from '#src/blocks/look.ts';
-import { type LiveQuantity, type ValueView, useLiveValue, useValueView } from './live-values.tsx';
+import {
+  type LiveQuantity,
+  type UnitStyle,
+  type ValueView,
+  useLiveValue,
+  useUnitStyle,
+  useValueView,
+} from './live-values.tsx';
 import { placeValue, type PlacedValue } from './placed-value.ts';
 import { ValueDetails } from './value-details.tsx';
 import './live-value.css';
@@ -17,6 +25,7 @@ type Props = {
 export function LiveValueView({ quantityId, printed, zone, isTabStop = true }: Props) {
   const live = useLiveValue(quantityId);
   const [view] = useValueView();
+  const [units] = useUnitStyle();
   const place = zone === null ? {} : { 'data-zone': zoneKey(zone) };
   if (live === undefined)
     return (
@@ -35,7 +44,7 @@ export function LiveValueView({ quantityId, printed, zone, isTabStop = true }: P
       </span>
     );
   }
-  const placed = placeValue(live.quantity, live.value, printed);
+  const placed = inStyle(placeValue(live.quantity, live.value, printed), units);
   const trigger = (
     <button type="button" className="live-button" tabIndex={isTabStop ? 0 : -1} aria-label={spoken(live, placed, view)}>
       <Figures placed={placed} view={view} />
@@ -54,6 +63,9 @@ export function LiveValueView({ quantityId, printed, zone, isTabStop = true }: P
     </span>
   );
 }
+
+const inStyle = (placed: PlacedValue, units: UnitStyle): PlacedValue =>
+  units === 'print' ? placed : { ...placed, asSet: inSi(placed.asSet) ?? placed.asSet };
 
 function Figures({ placed: { printed, asSet, isMoved, missing }, view }: { placed: PlacedValue; view: ValueView }) {
   if (view === 'printed') return <span className="live-number">{printed}</span>;

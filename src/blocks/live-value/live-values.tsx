@@ -13,8 +13,20 @@ export const valueViews = ['both', 'set', 'printed'] as const;
 export type ValueView = (typeof valueViews)[number];
 export const valueViewWords: Record<ValueView, string> = { both: 'Both', set: 'As set', printed: 'As printed' };
 
-type Shared = { store: LiveStore | null; view: ValueView; setView: (view: ValueView) => void };
-const SharedValues = createContext<Shared>({ store: null, view: 'both', setView: () => undefined });
+/** Values that are set are written as the manual writes its units, or in SI. What was printed always stands as printed. */
+export const unitStyles = ['print', 'si'] as const;
+export type UnitStyle = (typeof unitStyles)[number];
+export const unitStyleWords: Record<UnitStyle, string> = { print: 'Its own units', si: 'SI' };
+
+type Shared = {
+  store: LiveStore | null;
+  view: ValueView;
+  setView: (view: ValueView) => void;
+  units: UnitStyle;
+  setUnits: (units: UnitStyle) => void;
+};
+const plainly = { view: 'both', setView: () => undefined, units: 'print', setUnits: () => undefined } as const;
+const SharedValues = createContext<Shared>({ store: null, ...plainly });
 
 /** The values of one manual for everything inside. The setting is kept for the tab; an address may bring one (`?setting=channel:16`). */
 export function LiveValues({ manualId, children }: { manualId: string; children: ReactNode }) {
@@ -22,6 +34,7 @@ export function LiveValues({ manualId, children }: { manualId: string; children:
   const { data: tables } = useQuery(channelTablesOfManual(manualId));
   const { data: stored } = useQuery(planOfManual(manualId));
   const [view, setView] = useStored('benchleaf.values', valueViews, 'both');
+  const [units, setUnits] = useStored('benchleaf.units', unitStyles, 'print');
   useState(() => takeFromAddress(manualId));
   const store = useMemo(() => {
     if (data === undefined || tables === undefined || stored === undefined) return null;
@@ -35,7 +48,7 @@ export function LiveValues({ manualId, children }: { manualId: string; children:
       onChange: (setting) => writeSetting(manualId, setting),
     });
   }, [manualId, data, tables, stored]);
-  const shared = useMemo(() => ({ store, view, setView }), [store, view, setView]);
+  const shared = useMemo(() => ({ store, view, setView, units, setUnits }), [store, view, setView, units, setUnits]);
   return <SharedValues.Provider value={shared}>{children}</SharedValues.Provider>;
 }
 
@@ -55,7 +68,7 @@ export function LiveValuesOf({
   view?: ValueView;
   children: ReactNode;
 }) {
-  const shared = useMemo(() => ({ store, view, setView: () => undefined }), [store, view]);
+  const shared = useMemo(() => ({ ...plainly, store, view }), [store, view]);
   return <SharedValues.Provider value={shared}>{children}</SharedValues.Provider>;
 }
 
@@ -65,6 +78,11 @@ export const useLiveStore = (): LiveStore | null => useContext(SharedValues).sto
 export function useValueView(): [ValueView, (view: ValueView) => void] {
   const { view, setView } = useContext(SharedValues);
   return [view, setView];
+}
+
+export function useUnitStyle(): [UnitStyle, (units: UnitStyle) => void] {
+  const { units, setUnits } = useContext(SharedValues);
+  return [units, setUnits];
 }
 
 const silent = () => () => undefined;

@@ -1,7 +1,10 @@
 import { useId, useState } from 'react';
 import {
+  unitStyles,
+  unitStyleWords,
   useLiveStore,
   useSetting,
+  useUnitStyle,
   useValueView,
   valueViewWords,
   valueViews,
@@ -113,13 +116,23 @@ function Standing({ summary: { moved, outside, missing, disagreeing } }: { summa
 
 function ValueViewChoice() {
   const [view, setView] = useValueView();
+  const [units, setUnits] = useUnitStyle();
   return (
-    <ToggleGroup
-      label="How live values are shown"
-      className="screen-only"
-      value={view}
-      onValueChange={setView}
-      choices={valueViews.map((value) => ({ value, label: valueViewWords[value] }))}
-    />
+    <>
+      <ToggleGroup
+        label="Units of live values"
+        className="screen-only"
+        value={units}
+        onValueChange={setUnits}
+        choices={unitStyles.map((value) => ({ value, label: unitStyleWords[value] }))}
+      />
+      <ToggleGroup
+        label="How live values are shown"
+        className="screen-only"
+        value={view}
+        onValueChange={setView}
+        choices={valueViews.map((value) => ({ value, label: valueViewWords[value] }))}
+      />
+    </>
   );
 }
