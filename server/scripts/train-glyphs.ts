@@ -3,7 +3,8 @@ import path from 'node:path';
 import { projectRoot } from '#server/db/database.ts';
 import { type Network, likelihoods, packed } from '#shared/reading/glyphs/network.ts';
 import { inputs } from '#shared/reading/glyphs/patch.ts';
-import { capitalOf, flatThree, fractions, hasGlyph, randomFrom, registeredFaces, sample } from './glyph-samples.ts';
+import { randomFromSeed } from '#shared/kit/random.ts';
+import { capitalOf, flatThree, fractions, hasGlyph, registeredFaces, sample } from './glyph-samples.ts';
 
 /**
  * Trains the classifier of signs that the English model cannot write, on glyphs drawn from the faces there are and aged,
@@ -21,7 +22,7 @@ const samplesOfPlain = 22;
 type Sample = { given: Float32Array; wanted: number };
 
 function samplesOf(faces: readonly string[], seed: number, share = 1): Map<string, Sample[]> {
-  const random = randomFrom(seed);
+  const random = randomFromSeed(seed);
   return new Map(
     faces.map((face) => {
       const capital = capitalOf(face);
@@ -54,7 +55,7 @@ function freshNetwork(random: () => number): Network {
 
 /** Stochastic gradient descent with momentum on the cross entropy, one sample at a time, the step falling to nothing. */
 function train(samples: readonly Sample[], seed: number): Network {
-  const random = randomFrom(seed);
+  const random = randomFromSeed(seed);
   const network = freshNetwork(random);
   const order = samples.map((_, at) => at);
   const total = epochs * samples.length;

@@ -5,6 +5,7 @@ import { tablesOf } from '#shared/document/tables.ts';
 import type { Reading, ReadingWord } from './reading.ts';
 import { repairWords } from './repair.ts';
 import { documentOf } from './structure.ts';
+import { readingOf } from './words.fixture.ts';
 import { columnMeaning, tableKind } from './type-columns.ts';
 
 const letterWidth = 30;
@@ -26,28 +27,7 @@ function wordsOf(lines: readonly [number, number, string][]): ReadingWord[] {
 
 const page = (...lines: string[]): [number, number, string][] => lines.map((line, at) => [300, 400 + at * pitch, line]);
 
-function reading(words: ReadingWord[], figures: Reading['figures'] = []): Reading {
-  return {
-    recipe: {
-      engine: 'test',
-      language: 'eng',
-      segmentation: 'one-column',
-      dpi: 300,
-      skewDegrees: 0,
-      rulesRemoved: true,
-      flattened: true,
-    },
-    confidence: 95,
-    width: 2550,
-    height: 3300,
-    transform: [
-      [1, 0, 0],
-      [0, 1, 0],
-    ],
-    words,
-    figures,
-  };
-}
+const reading = (words: ReadingWord[], figures: Reading['figures'] = []): Reading => readingOf(words, { figures });
 
 const documentOfLines = (...lines: [number, number, string][]) => documentOf(reading(wordsOf(lines)));
 const kindsOf = (document: ReturnType<typeof documentOf>): string[] => document.content.map(({ type }) => type);

@@ -2,28 +2,9 @@ import { describe, expect, it } from 'vitest';
 import type { DocNode } from '#shared/document/define-block.ts';
 import type { PageDocument } from '#shared/document/page-document.ts';
 import { allNodes, textOf } from '#shared/document/text-of.ts';
-import type { Reading, ReadingWord, Transform } from './reading.ts';
 import { documentOf } from './structure.ts';
 import { takeReading } from './take-reading.ts';
-import { readWords } from './words.fixture.ts';
-
-const asDelivered: Transform = [
-  [1, 0, 0],
-  [0, 1, 0],
-];
-
-function readingOf(words: ReadingWord[], transform = asDelivered): Reading {
-  const recipe: Reading['recipe'] = {
-    engine: 'made by hand',
-    language: 'eng',
-    segmentation: 'one-column',
-    dpi: 300,
-    skewDegrees: 0,
-    rulesRemoved: true,
-    flattened: true,
-  };
-  return { recipe, confidence: 90, width: 2550, height: 3300, transform, words, figures: [] };
-}
+import { readWords, readingOf } from './words.fixture.ts';
 
 const line = 'Set the oscillator to twelve turns';
 const before = readingOf(readWords(['Set the oscilator to twehve turns'], { twehve: 60, oscilator: 80 }));
@@ -70,13 +51,12 @@ describe('another reading of a page that people have worked on', () => {
   });
 
   it('moves the zones to where the same print lies on the new picture', () => {
-    const after = readingOf(
-      [],
-      [
+    const after = readingOf([], {
+      transform: [
         [1, 0, 40],
         [0, 1, -20],
       ],
-    );
+    });
     const { document } = takeReading(documentOf(before), before, after);
     const [first] = [...allNodes(document)].flatMap(({ marks }) => marks?.map(({ attrs }) => attrs?.['zone']) ?? []);
     expect(first).toEqual([300 - 40, 400 + 20, 86, 32]);

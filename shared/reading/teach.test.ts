@@ -6,28 +6,10 @@ import { habitsFrom, lessonsOf } from './lessons.ts';
 import type { Reading } from './reading.ts';
 import { documentOf } from './structure.ts';
 import { taught } from './teach.ts';
-import { readWords } from './words.fixture.ts';
+import { readWords, readingOf } from './words.fixture.ts';
 
-const readingOf = (lines: readonly string[], confidences: Record<string, number> = {}): Reading => ({
-  recipe: {
-    engine: 'made by hand',
-    language: 'eng',
-    segmentation: 'one-column',
-    dpi: 300,
-    skewDegrees: 0,
-    rulesRemoved: true,
-    flattened: true,
-  },
-  confidence: 90,
-  width: 2550,
-  height: 3300,
-  transform: [
-    [1, 0, 0],
-    [0, 1, 0],
-  ],
-  words: readWords(lines, confidences),
-  figures: [],
-});
+const readingOfLines = (lines: readonly string[], confidences: Record<string, number> = {}) =>
+  readingOf(readWords(lines, confidences));
 const corrected = (reading: Reading, from: string, to: string): DocNode =>
   JSON.parse(JSON.stringify(documentOf(reading)).replaceAll(`"text":"${from}"`, `"text":"${to}"`)) as DocNode;
 const doubts = (document: DocNode) =>
@@ -35,11 +17,11 @@ const doubts = (document: DocNode) =>
     (marks ?? []).filter(({ type }) => type === 'doubt').map(({ attrs }) => ({ text, ...attrs })),
   );
 
-const first = readingOf(['Adjust the discriminator for zero.', 'The discriminator is in the first if can.']);
-const second = readingOf(['Turn the discriminator by hand.']);
+const first = readingOfLines(['Adjust the discriminator for zero.', 'The discriminator is in the first if can.']);
+const second = readingOfLines(['Turn the discriminator by hand.']);
 const vouching = [lessonsOf(documentOf(first), first), lessonsOf(documentOf(second), second)];
 const page = (lines: readonly string[], confidences: Record<string, number> = {}): PageDocument =>
-  documentOf(readingOf(lines, confidences));
+  documentOf(readingOfLines(lines, confidences));
 
 describe('a manual that learns from its corrected pages', () => {
   it('no longer doubts a word that stands on two of them', () => {
@@ -55,7 +37,7 @@ describe('a manual that learns from its corrected pages', () => {
   });
 
   it('doubts what was corrected elsewhere, with what it was made into, however sure the reading is', () => {
-    const read = readingOf(['Trim the tnmmer slowly.']);
+    const read = readingOfLines(['Trim the tnmmer slowly.']);
     const lesson = lessonsOf(corrected(read, 'tnmmer', 'trimmer'), read);
     expect(lesson.corrections).toEqual([{ read: 'tnmmer', meant: 'trimmer', times: 1 }]);
     const elsewhere = taught(page(['The tnmmer, again.']), habitsFrom([lesson], []));
@@ -78,7 +60,7 @@ describe('a manual that learns from its corrected pages', () => {
   });
 
   it('learns nothing from a word that is still in doubt, nor from plain numbers', () => {
-    const read = readingOf(['Feed 455 to the grid'], { grid: 40 });
+    const read = readingOfLines(['Feed 455 to the grid'], { grid: 40 });
     expect(lessonsOf(documentOf(read), read).words).toEqual(['Feed', 'the']);
   });
 });

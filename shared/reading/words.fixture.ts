@@ -1,4 +1,4 @@
-import type { ReadingWord } from './reading.ts';
+import type { Reading, ReadingWord, Transform } from './reading.ts';
 
 const letterWidth = 30;
 const pitch = 50;
@@ -21,3 +21,28 @@ export function readWords(lines: readonly string[], confidences: Record<string, 
     })),
   );
 }
+
+const asDelivered: Transform = [
+  [1, 0, 0],
+  [0, 1, 0],
+];
+
+/** A reading of a letter-size page at 300 dots an inch with these words. */
+export const readingOf = (words: ReadingWord[], more: Partial<Reading> = {}): Reading => ({
+  recipe: {
+    engine: 'made by hand',
+    language: 'eng',
+    segmentation: 'one-column',
+    dpi: 300,
+    skewDegrees: 0,
+    rulesRemoved: true,
+    flattened: true,
+  },
+  confidence: 95,
+  width: 2550,
+  height: 3300,
+  transform: asDelivered,
+  words,
+  figures: [],
+  ...more,
+});

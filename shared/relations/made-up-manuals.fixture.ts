@@ -1,3 +1,4 @@
+import { randomFromSeed } from '#shared/kit/random.ts';
 import { readPrintedNumber, type PrintedNumber } from './printed-number.ts';
 
 /** A manual with numbers whose relations are known: forms that are zero, over names of numbers (`name~2` is a second print). */
@@ -9,15 +10,8 @@ type Dice = {
   chance: (share: number) => boolean;
 };
 
-/** Mulberry32: a small generator that gives the same numbers everywhere. */
 function diceOf(seed: number): Dice {
-  let state = seed;
-  const next = (): number => {
-    state = (state + 0x6d2b79f5) | 0;
-    let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
-    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
-  };
+  const next = randomFromSeed(seed);
   const whole = (low: number, high: number): number => low + Math.floor(next() * (high - low + 1));
   // The list is never empty, so there is always something to pick.
   return {

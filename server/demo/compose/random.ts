@@ -1,3 +1,5 @@
+import { randomFromSeed } from '#shared/kit/random.ts';
+
 /** Chance that comes out the same on every run: the demo pages must not change by being composed again. */
 export type Random = () => number;
 
@@ -7,14 +9,7 @@ export function randomFrom(words: string): Random {
   for (let index = 0; index < words.length; index += 1) {
     seed = Math.imul(seed ^ words.charCodeAt(index), 0x01000193);
   }
-  // mulberry32
-  let state = seed >>> 0;
-  return () => {
-    state = (state + 0x6d2b79f5) >>> 0;
-    let mixed = Math.imul(state ^ (state >>> 15), state | 1);
-    mixed ^= mixed + Math.imul(mixed ^ (mixed >>> 7), mixed | 61);
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
-  };
+  return randomFromSeed(seed);
 }
 
 /** About -1 to 1, mostly near 0. */
