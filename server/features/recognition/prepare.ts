@@ -66,7 +66,13 @@ export async function prepare(
   const lean = Math.abs(skew) < leastSkewDegrees ? 0 : skew;
   const shown = { ...(await written(raw, lean, target)), dpi: dpi * size };
   // Made even before it is turned: the white corners that turning adds would otherwise pull the paper beside them down.
-  const straight = lean === 0 ? even : drawnAnew(even, shown, backToDrawn(shrunk, shown, { lean, size: 1 }));
+  // The image library turns it: mixing four pixels, as for people, loses the thin strokes of fractions and of Ω.
+  const straight =
+    lean === 0
+      ? even
+      : await greyOf(
+          await sharpOf(even).rotate(-lean, { background: 'white' }).raw().toBuffer({ resolveWithObject: true }),
+        );
   const engine = forEngine(await atReadingSize(straight, shown.dpi), wish);
   const leant = backToDrawn(shrunk, shown, { lean, size });
   const transform = composed(leant, backFrom(turn, turnedSize({ width, height }, turn)));

@@ -41,6 +41,12 @@ function Editing({ store, number }: { store: LiveStore; number: number }) {
   const { values, problems, findings } = useWorkedOut(store, plan);
   const stage = plan.stages.find(({ id }) => id === chosen);
   const isChanged = plan !== store.plan;
+  // The saved plan is a new one to edit, so this component is gone by the time the saving is over.
+  const keep = (): Promise<unknown> =>
+    save.mutateAsync({ baseNumber: number, plan }).then(
+      () => toast('The plan is saved.'),
+      () => undefined,
+    );
   const add = (kind: StageKind): void => {
     const made = withStage(plan, kind, chosen);
     setPlan(made.plan);
@@ -56,7 +62,7 @@ function Editing({ store, number }: { store: LiveStore; number: number }) {
             className="ml-auto"
             disabled={!isChanged}
             busy={save.isPending && 'Saving …'}
-            onClick={() => save.mutate({ baseNumber: number, plan }, { onSuccess: () => toast('The plan is saved.') })}
+            onClick={() => void keep()}
           >
             Save the plan
           </Button>
