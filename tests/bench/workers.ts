@@ -3,6 +3,7 @@ import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
 import { projectRoot } from '#server/db/database.ts';
+import type { DrawInput } from '#server/features/pages/draw.ts';
 import { WorkerProcess } from '#server/jobs/worker-pool.ts';
 
 const pages = Array.from({ length: 10 }, (_, index) => index);
@@ -50,9 +51,11 @@ async function readOne(worker: WorkerProcess, sourcePage: number, folder: string
     path: source,
     mediaType: 'application/pdf',
     sourcePage,
+    part: null,
     target: drawn,
+    layerTarget: path.join(folder, `${sourcePage}-layer.json`),
     mostMegapixels: 120,
-  });
+  } satisfies DrawInput);
   await worker.run('read', { drawn, dpi: 300, target: path.join(folder, `${sourcePage}-read.jpg`), wish: {} });
 }
 
