@@ -36,7 +36,7 @@ export function compilePlan(
   quantities: readonly QuantityDefinition[],
   tables: readonly LookupTable[] = [],
 ): CompiledPlan {
-  const definitions = plan.stages.flatMap(defineStage);
+  const definitions = planDefinitions(plan);
   const own = plan.stages.flatMap((stage) => objectionsTo(stage, plan));
   const told = new Set(own.map(({ stage }) => stage));
   const engine = compile([...quantities, ...definitions], tables).problems.flatMap((problem) => {
@@ -48,6 +48,9 @@ export function compilePlan(
 }
 
 type Sourced = Extract<Stage, { frequency: string }>;
+/** The quantities of a plan alone, for whoever computes with them and does not ask what is wrong. */
+export const planDefinitions = ({ stages }: FrequencyPlan): QuantityDefinition[] => stages.flatMap(defineStage);
+
 type Objection = [code: PlanProblem['code'], says: string];
 
 function objectionsTo(stage: Stage, plan: FrequencyPlan): PlanProblem[] {

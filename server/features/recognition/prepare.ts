@@ -14,9 +14,9 @@ import type { RecipeWish, Transform } from '#shared/reading/reading.ts';
 import type { Segmentation } from './engine.ts';
 
 /** Reading works best near this resolution; finer scans are brought down to it, coarser ones up, for reading only. */
-const readingDpi = 300;
+export const readingDpi = 300;
 const finestDpi = 400;
-const coarsestDpi = 250;
+export const coarsestDpi = 250;
 const analysisDpi = 100;
 /** A page that leans less than this is left as it is: turning it would only soften it. */
 const leastSkewDegrees = 0.08;

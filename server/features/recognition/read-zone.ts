@@ -8,12 +8,11 @@ import { removeLeaders } from '#shared/reading/picture/leaders.ts';
 import { removeRules } from '#shared/reading/picture/rules.ts';
 import type { ReadingWord } from '#shared/reading/reading.ts';
 import { repairWords } from '#shared/reading/repair.ts';
+import { coarsestDpi, readingDpi } from './prepare.ts';
 import { readPiece } from './reread.ts';
 
 export type ReadZoneInput = { image: string; dpi: number; zone: Zone; as: ZoneKind };
 
-const readingDpi = 300;
-const coarsestDpi = 250;
 /** A rule is told from a stroke by its length, so the zone's surroundings are looked at too; inches. */
 const surroundingInches = 0.5;
 const segmentations = { text: 'one-column', line: 'line', lettering: 'labels' } as const;

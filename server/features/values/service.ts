@@ -3,7 +3,7 @@ import { eq } from 'drizzle-orm';
 import { type Quantity, type QuantityInput, quantityInput } from '#shared/api/quantities.ts';
 import { builtInTables } from '#shared/calc/channel-plans.ts';
 import { type Program, compile } from '#shared/calc/program.ts';
-import { compilePlan } from '#shared/plan/compile-plan.ts';
+import { planDefinitions } from '#shared/plan/compile-plan.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { quantities } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
@@ -21,8 +21,7 @@ export function programOf(db: Connection, manualId: string): Program {
   existingManual(db, manualId);
   const definitions = quantityRows(db, manualId).map(({ definition }) => definition);
   const tables = [...builtInTables, ...channelTablesOfManual(db, manualId)];
-  const plan = compilePlan(planOfManual(db, manualId), definitions, tables);
-  return compile([...definitions, ...plan.definitions], tables);
+  return compile([...definitions, ...planDefinitions(planOfManual(db, manualId))], tables);
 }
 
 export function createQuantity(
