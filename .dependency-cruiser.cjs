@@ -15,7 +15,7 @@ const sharedModules = [
   'api',
 ];
 const serverLayers = ['config', 'db', 'storage', 'jobs', 'http', 'features'];
-const serverFeatures = ['accounts', 'manuals', 'pages', 'recognition', 'revisions', 'values', 'search'];
+const serverFeatures = ['accounts', 'manuals', 'pages', 'recognition', 'revisions', 'coediting', 'values', 'search'];
 const sourceLayers = ['lib', 'ui', 'api', 'blocks', 'scan', 'features', 'app'];
 
 const forbid = (name, from, to) => ({ name, severity: 'error', from, to });
@@ -56,11 +56,16 @@ module.exports = {
     ),
     forbid(
       'shared uses few packages',
-      { path: '^shared/', pathNot: '\\.test\\.ts$' },
+      { path: '^shared/', pathNot: ['\\.test\\.ts$', '^shared/document/(page-schema|shared-text)\\.ts$'] },
       {
         dependencyTypes: ['npm', 'npm-dev', 'core'],
         pathNot: 'node_modules/(zod|decimal\\.js|mathjs)/',
       },
+    ),
+    forbid(
+      'shared text stays in document',
+      { path: '^shared/', pathNot: '^shared/document/(page-schema|shared-text)\\.ts$' },
+      { path: 'node_modules/(yjs|@tiptap)/' },
     ),
     forbid(
       'mathjs stays in units and expressions',

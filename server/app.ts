@@ -7,6 +7,7 @@ import { pinoHttp } from 'pino-http';
 import { getHealth } from '#shared/api/health.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { type Auth, accountRoutes, hasDemoPeople, sessionFinder } from '#server/features/accounts/index.ts';
+import { type Presence, coeditingRoutes } from '#server/features/coediting/index.ts';
 import { type AddPages, manualRoutes } from '#server/features/manuals/index.ts';
 import { pageRoutes } from '#server/features/pages/index.ts';
 import { recognitionRoutes } from '#server/features/recognition/index.ts';
@@ -25,6 +26,7 @@ export type AppTools = Tools & {
   auth: Auth;
   sideWorker: SideWorker;
   addPages: AddPages;
+  presence: Presence;
   trustedOrigins: string[];
   clientDir: string;
 };
@@ -65,6 +67,7 @@ function apiRoutes(tools: AppTools): ApiRouter {
   pageRoutes(api, tools);
   recognitionRoutes(api, tools);
   revisionRoutes(api, tools);
+  coeditingRoutes(api, tools);
   valueRoutes(api, tools);
   searchRoutes(api, tools);
   liveRoute(api, tools);

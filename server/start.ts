@@ -7,6 +7,7 @@ import { type Config } from '#server/config/config.ts';
 import { readOrCreateSecret } from '#server/config/secret.ts';
 import { openDatabase, projectRoot } from '#server/db/database.ts';
 import { createAuth, createMailer } from '#server/features/accounts/index.ts';
+import { coeditingSocket, createSharedPages } from '#server/features/coediting/index.ts';
 import { addPagesBy, drawStep } from '#server/features/pages/index.ts';
 import { readStep } from '#server/features/recognition/index.ts';
 import { learnStep, structureStep, teachStep } from '#server/features/revisions/index.ts';
@@ -71,14 +72,21 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
     sendMail,
   });
   const clientDir = path.join(projectRoot, 'dist/client');
-  const appTools: AppTools = { ...tools, auth, sideWorker, addPages: addPagesBy(announce), trustedOrigins, clientDir };
-  const { app } = createApp(appTools);
+  const sharedPages = createSharedPages(tools);
+  const { presence } = sharedPages;
+  const addPages = addPagesBy(announce);
+  const appTools: AppTools = { ...tools, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
+  const { app, api } = createApp(appTools);
+  const socket = coeditingSocket(sharedPages, { findSession: api.findSession, trustedOrigins });
   server.removeAllListeners('request');
   server.on('request', app);
+  server.on('upgrade', (...arrival) => void socket.upgrade(...arrival));
   runner.start();
 
   const stop = async (): Promise<void> => {
     sideWorker.stop();
+    sharedPages.stop();
+    socket.stop();
     const closed = new Promise((resolve) => server.close(resolve));
     await runner.stop();
     server.closeIdleConnections();

@@ -21,6 +21,7 @@ const environment = z.object({
   MAX_PICTURE_MEGAPIXELS: count.default(120),
   WORKER_MEMORY_MB: count.default(900),
   PAGE_TIMEOUT_SECONDS: count.default(180),
+  REVISION_AFTER_QUIET_SECONDS: z.coerce.number().positive().default(60),
   SMTP_URL: z.string().optional(),
   MAIL_FROM: z.string().default('Benchleaf <no-reply@benchleaf.example>'),
   S3_BUCKET: z.string().optional(),
@@ -44,6 +45,8 @@ export type Config = {
     pictureMegapixels: number;
     workerMemoryBytes: number;
     pageTimeoutMs: number;
+    /** What is written on a page becomes a revision once nobody has written for so long. */
+    quietMs: number;
   };
   mail: { smtpUrl: string | null; from: string };
   s3: { bucket: string; endpoint: string | null; region: string } | null;
@@ -73,6 +76,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
       pictureMegapixels: data.MAX_PICTURE_MEGAPIXELS,
       workerMemoryBytes: data.WORKER_MEMORY_MB * megabyte,
       pageTimeoutMs: data.PAGE_TIMEOUT_SECONDS * 1000,
+      quietMs: data.REVISION_AFTER_QUIET_SECONDS * 1000,
     },
     mail: { smtpUrl: data.SMTP_URL ?? null, from: data.MAIL_FROM },
     s3:

@@ -13,7 +13,7 @@ export type Call<P, Q, B> = { params: P; query: Q; body: B; user: SignedIn; requ
 /** A router that only takes endpoints described in `shared/api`, so that none is left unguarded or undescribed. */
 export type ApiRouter = { router: Router; findSession: FindSession; served: Endpoint[] };
 
-const nobody: SignedIn = { id: '', name: '', email: '', role: 'reader' };
+const nobody: SignedIn = { id: '', name: '', email: '', role: 'reader', sessionId: '' };
 
 async function guard(api: ApiRouter, endpoint: Endpoint, request: Request): Promise<SignedIn> {
   if (endpoint.action === null) return nobody;

@@ -48,6 +48,17 @@ export const saveDocument = defineEndpoint({
   reply: revision,
 });
 
+export const saveTogether = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/revisions',
+  summary:
+    'Make a revision of what people wrote together since the last one; answers the current one if that is nothing',
+  action: 'edit-pages',
+  params: pageParams,
+  body: z.object({ note }).optional(),
+  reply: revision,
+});
+
 export const restoreRevision = defineEndpoint({
   method: 'post',
   path: '/api/pages/:pageId/revisions/:number/restore',

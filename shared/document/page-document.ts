@@ -69,7 +69,7 @@ function checkNode(node: DocNode, path: string, issues: Issue[]): DocNode {
   return {
     type: node.type,
     ...(attributes.success && Object.keys(attributes.data).length > 0 ? { attrs: attributes.data } : {}),
-    ...checkMarks(node.marks, path, issues),
+    // Marks are for text alone: two people's edits are merged character by character, and a break or a value has none.
     ...checkChildren(node, definition, { path, issues }),
   };
 }

@@ -1,9 +1,11 @@
 import type { QueryClient } from '@tanstack/react-query';
 import { type LiveEvent, liveEvent } from '#shared/api/events.ts';
 import type { PageSummary } from '#shared/api/pages.ts';
+import type { PagePresence } from '#shared/api/presence.ts';
 import { manualKeys } from './manuals.ts';
 import { pageKeys } from './page-keys.ts';
 import { partKeys } from './part-keys.ts';
+import { presenceKey, withPresence } from './presence.ts';
 import { quantityKeys } from './quantity-keys.ts';
 import { sourceKeys } from './source-keys.ts';
 
@@ -74,6 +76,11 @@ export function applyEvent(client: QueryClient, event: LiveEvent, countsChanged:
     case 'quantities':
       void client.invalidateQueries({ queryKey: quantityKeys.ofManual(event.manualId) });
       countsChanged(event.manualId);
+      return;
+    case 'presence':
+      client.setQueryData(presenceKey(event.manualId), (known: PagePresence[] | undefined) =>
+        withPresence(known, event),
+      );
       return;
     case 'queue':
       client.setQueryData(queueKey, { waiting: event.waiting, active: event.active } satisfies QueueState);

@@ -18,11 +18,9 @@ export const oneRevision = (pageId: string, number: number) =>
     staleTime: Infinity,
   });
 
-type Edit = { baseRevision: number; document: Record<string, unknown>; note?: string };
-
-export const saveDocument = (client: QueryClient, pageId: string) =>
+export const saveTogether = (client: QueryClient, pageId: string) =>
   mutationOptions({
-    mutationFn: (body: Edit) => call(api.saveDocument, { params: { pageId }, body }),
+    mutationFn: (body: { note?: string }) => call(api.saveTogether, { params: { pageId }, body }),
     onSuccess: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
   });
 

@@ -4,6 +4,7 @@ import type { z } from 'zod';
 import type { BlockDefinition } from '#shared/document/define-block.ts';
 import type { MarkKind } from '#shared/document/marks.ts';
 import { marks } from '#shared/document/marks.ts';
+import { attributeSpecs } from '#shared/document/page-schema.ts';
 import { contentExpression } from '#shared/document/registry.ts';
 import type { Look, LookContext, Spec, SpecPart } from './look.ts';
 
@@ -62,18 +63,15 @@ export function markFromDefinition(
 
 function attributesFrom(schema: z.ZodObject): Attributes {
   return Object.fromEntries(
-    Object.entries(schema.shape).map(([name, type]) => {
-      const fallback = (type as z.ZodType).safeParse(undefined);
-      return [
-        name,
-        {
-          ...(fallback.success ? { default: fallback.data } : { isRequired: true }),
-          rendered: false,
-          keepOnSplit: !ofOneBlock.has(name),
-          parseHTML: (element: HTMLElement) => readData(element, schema)?.[name],
-        },
-      ];
-    }),
+    Object.entries(attributeSpecs(schema)).map(([name, spec]) => [
+      name,
+      {
+        ...('default' in spec ? spec : { isRequired: true }),
+        rendered: false,
+        keepOnSplit: !ofOneBlock.has(name),
+        parseHTML: (element: HTMLElement) => readData(element, schema)?.[name],
+      },
+    ]),
   );
 }
 

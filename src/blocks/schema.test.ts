@@ -4,6 +4,7 @@ import { describe, expect, it } from 'vitest';
 import type { DocNode } from '#shared/document/define-block.ts';
 import { type MarkKind, marks } from '#shared/document/marks.ts';
 import { readDocument } from '#shared/document/page-document.ts';
+import { pageSchema } from '#shared/document/page-schema.ts';
 import { type BlockKind, blocks } from '#shared/document/registry.ts';
 import { editorSchema } from './editor-schema.ts';
 import { everyKind } from './every-kind.fixture.ts';
@@ -29,6 +30,11 @@ describe('every kind of the registry', () => {
     const type = schema.nodes[kind];
     expect(type).toBeDefined();
     expect(Object.keys(type?.spec.attrs ?? {}).sort()).toEqual(Object.keys(blocks[kind].attributes.shape).sort());
+  });
+
+  it.each(Object.keys(blocks) as BlockKind[])('%s may hold and stand in the same as where text is shared', (kind) => {
+    const [here, there] = [schema.nodes[kind]?.spec, pageSchema.nodes[kind].spec];
+    expect([here?.content, here?.group, here?.inline]).toEqual([there.content, there.group, there.inline]);
   });
 
   it('has nothing beside it in the editor', () => {

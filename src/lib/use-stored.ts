@@ -17,6 +17,14 @@ export function writeStored(key: string, value: string): void {
   }
 }
 
+export function removeStored(key: string): void {
+  try {
+    window.localStorage.removeItem(key);
+  } catch {
+    // Without storage there was nothing to remove.
+  }
+}
+
 /** A choice of this person on this machine, one of a closed list, kept between visits. */
 export function useStored<const T extends string>(
   key: string,

@@ -1,4 +1,4 @@
-import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
+import { blob, index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import type { revisionOrigins } from '#shared/api/revisions.ts';
 import type { PageDocument } from '#shared/document/page-document.ts';
 import type { Lessons } from '#shared/reading/lessons.ts';
@@ -35,4 +35,29 @@ export const lessons = sqliteTable(
     content: text({ mode: 'json' }).$type<Lessons>().notNull(),
   },
   (table) => [index('lessons_of_a_manual').on(table.manualId)],
+);
+
+/** The text of a page as people share it while they correct it (Yjs). It is made when the first of them opens the page. */
+export const sharedTexts = sqliteTable('shared_texts', {
+  pageId: text('page_id')
+    .primaryKey()
+    .references(() => pages.id),
+  /** The document version that the text was last written by. */
+  version: integer().notNull(),
+  /** As it was when the page's current revision was made; what came since stands in the edits. */
+  state: blob({ mode: 'buffer' }).notNull(),
+});
+
+/** What people wrote since the page's last revision, each edit kept before the one who made it is told so. */
+export const sharedEdits = sqliteTable(
+  'shared_edits',
+  {
+    id: integer().primaryKey({ autoIncrement: true }),
+    pageId: text('page_id')
+      .notNull()
+      .references(() => pages.id),
+    edit: blob({ mode: 'buffer' }).notNull(),
+    userId: text('user_id').notNull(),
+  },
+  (table) => [index('shared_edits_of_a_page').on(table.pageId, table.id)],
 );

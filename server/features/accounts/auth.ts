@@ -90,5 +90,5 @@ export const sessionFinder =
     const found = await auth.api.getSession({ headers: fromNodeHeaders(request.headers) });
     if (found === null || found.user.banned === true) return null;
     const { id, name, email } = found.user;
-    return { id, name, email, role: role.catch('reader').parse(found.user.role) };
+    return { id, name, email, role: role.catch('reader').parse(found.user.role), sessionId: found.session.id };
   };

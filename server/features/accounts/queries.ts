@@ -1,5 +1,5 @@
-import { and, asc, eq, isNotNull, sql } from 'drizzle-orm';
-import { role } from '#shared/access/roles.ts';
+import { and, asc, eq, gt, isNotNull, sql } from 'drizzle-orm';
+import { type Role, role } from '#shared/access/roles.ts';
 import type { Person } from '#shared/api/people.ts';
 import { account, session, user } from '#server/db/schema/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
@@ -49,6 +49,17 @@ export const changeUser = (
 export const endSessions = (db: Connection, userId: string): void => {
   db.delete(session).where(eq(session.userId, userId)).run();
 };
+
+/** The role that a session stands for at this moment; null once it has ended, or its person is barred. */
+export function roleOfSession(db: Connection, sessionId: string, now: Date): Role | null {
+  const row = db
+    .select({ role: user.role, banned: user.banned })
+    .from(session)
+    .innerJoin(user, eq(user.id, session.userId))
+    .where(and(eq(session.id, sessionId), gt(session.expiresAt, now)))
+    .get();
+  return row === undefined || row.banned === true ? null : role.catch('reader').parse(row.role);
+}
 
 export const administrators = (db: Connection): number =>
   db

@@ -11,6 +11,8 @@ import {
   revisions,
   searchEntries,
   searchQuantities,
+  sharedEdits,
+  sharedTexts,
 } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
@@ -29,7 +31,7 @@ export function dividePage(
 ): PageSummary[] {
   const page = existingPage(tools.db, pageId);
   if (page.half !== 'whole') throw new AppError('cannot-do', 'This page is half of a spread already.');
-  refuseWorkedOn(page);
+  refuseWorkedOn(tools.db, page);
   const right = tools.db.transaction((tx) => {
     moveLaterPages(tx, page, 1);
     const { manualId, sourceId, sourcePage, position, label } = page;
@@ -55,7 +57,7 @@ export function joinPage(tools: Tools, who: Who, pageId: string): PageSummary {
     .all();
   const [left, right] = (['left', 'right'] as const).map((side) => halves.find(({ half }) => half === side));
   if (left === undefined || right === undefined) throw new AppError('cannot-do', 'This page is no half of a spread.');
-  halves.forEach(refuseWorkedOn);
+  for (const half of halves) refuseWorkedOn(tools.db, half);
   tools.db.transaction((tx) => {
     removePage(tx, right, left.id);
     moveLaterPages(tx, right, -1);
@@ -68,8 +70,10 @@ export function joinPage(tools: Tools, who: Who, pageId: string): PageSummary {
   return pageSummary(existingPage(tools.db, left.id));
 }
 
-function refuseWorkedOn({ state, label }: PageRow): void {
-  if (state === 'corrected' || state === 'proofed')
+function refuseWorkedOn(db: Connection, { id, state, label }: PageRow): void {
+  const isBeingWritten =
+    db.select({ id: sharedEdits.id }).from(sharedEdits).where(eq(sharedEdits.pageId, id)).limit(1).get() !== undefined;
+  if (state === 'corrected' || state === 'proofed' || isBeingWritten)
     throw new AppError(
       'cannot-do',
       `Somebody has worked on page ${label}. Restore its first revision by hand if that is to go.`,
@@ -101,6 +105,8 @@ function removePage(tx: Connection, { id }: PageRow, heirId: string): void {
   tx.delete(searchEntries).where(eq(searchEntries.pageId, id)).run();
   tx.delete(searchQuantities).where(eq(searchQuantities.pageId, id)).run();
   tx.delete(lessons).where(eq(lessons.pageId, id)).run();
+  tx.delete(sharedEdits).where(eq(sharedEdits.pageId, id)).run();
+  tx.delete(sharedTexts).where(eq(sharedTexts.pageId, id)).run();
   tx.delete(revisions).where(eq(revisions.pageId, id)).run();
   tx.delete(readings).where(eq(readings.pageId, id)).run();
   tx.delete(pages).where(eq(pages.id, id)).run();

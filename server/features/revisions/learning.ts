@@ -11,6 +11,7 @@ import type { Connection } from '#server/jobs/events.ts';
 import type { LightStep } from '#server/jobs/runner.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { documentOfPage, findReading, findRevision } from './queries.ts';
+import { hasPendingEdits, intoSharedText } from './shared-text.ts';
 
 /** Corrections come in bursts; what they teach is spread once the burst is over. */
 const burstMs = 3000;
@@ -79,8 +80,9 @@ function teachPage(db: Connection, page: PageRow, habits: Habits): boolean {
   const reading = readingOf(db, page);
   const revision = findRevision(db, page.id, page.revision);
   if (reading === null || revision?.origin !== 'machine' || revision.readingId !== page.readingId) return false;
-  const document = machineDocument(reading, habits);
-  if (JSON.stringify(document) === JSON.stringify(revision.document)) return false;
+  const made = machineDocument(reading, habits);
+  if (JSON.stringify(made) === JSON.stringify(revision.document) || hasPendingEdits(db, page.id)) return false;
+  const document = intoSharedText(db, page.id, { document: made });
   const doubtCount = countDoubts(document);
   db.update(revisions).set({ document, doubtCount }).where(eq(revisions.id, revision.id)).run();
   changePage(db, page.id, { doubtCount });

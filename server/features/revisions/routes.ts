@@ -13,7 +13,7 @@ import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { documentOfPage, documentsOfManual, findRevision, revisionRows } from './queries.ts';
-import { restoreRevision, revisionReply, saveDocument } from './service.ts';
+import { restoreRevision, revisionReply, saveDocument, saveTogether } from './service.ts';
 
 export function revisionRoutes(api: ApiRouter, tools: Tools): void {
   const { db } = tools;
@@ -29,6 +29,9 @@ export function revisionRoutes(api: ApiRouter, tools: Tools): void {
   });
   serve(api, revisionApi.saveDocument, ({ user, params, body }) =>
     revisionReply(saveDocument(tools, user, { ...params, ...body, note: body.note ?? '' })),
+  );
+  serve(api, revisionApi.saveTogether, ({ user, params, body }) =>
+    revisionReply(saveTogether(tools, user, { ...params, note: body?.note ?? '' })),
   );
   serve(api, revisionApi.restoreRevision, ({ user, params, body }) =>
     revisionReply(restoreRevision(tools, user, { ...params, note: body?.note ?? '' })),

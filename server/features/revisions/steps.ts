@@ -2,13 +2,13 @@ import type { PageDocument } from '#shared/document/page-document.ts';
 import { counted } from '#shared/kit/counted.ts';
 import type { Reading } from '#shared/reading/reading.ts';
 import { takeReading } from '#shared/reading/take-reading.ts';
-import { type PageRow, changePage, findPage, tellPage } from '#server/features/pages/index.ts';
+import { type PageRow, changePage, existingPage, findPage, tellPage } from '#server/features/pages/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { LightStep } from '#server/jobs/runner.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { type RevisionRow, currentDocument, findReading, findRevision, isTouchedByPeople } from './queries.ts';
 import { habitsOfManual, machineDocument } from './learning.ts';
-import { addRevision, onCurrentPicture } from './service.ts';
+import { addRevision, onCurrentPicture, saveSharedText } from './service.ts';
 
 /**
  * Makes the page document of a new reading. A page that people have worked on keeps what they wrote: only words that
@@ -18,9 +18,11 @@ export const structureStep = (tools: Tools): LightStep => ({
   heavy: false,
   run(job) {
     const { db } = tools;
-    const page = findPage(db, job.subjectId);
+    const found = findPage(db, job.subjectId);
     const reading = findReading(db, Number(job.wish?.['readingId']));
-    if (page === undefined || reading === undefined || page.readingId === reading.id) return;
+    if (found === undefined || reading === undefined || found.readingId === reading.id) return;
+    // Whoever is writing on the page at this moment has touched it.
+    const page = saveSharedText(tools, db, { page: found, note: '' }) === null ? found : existingPage(db, found.id);
     const { content, imageKey } = reading;
     const { width, height, confidence, warnings = [] } = content;
     const change = { readingId: reading.id, imageKey, width, height, confidence, warnings, problem: null };

@@ -17,9 +17,7 @@ import { DoubtStrip } from './doubt-strip.tsx';
 import { positionOfZone, zoneAtCaret } from './find-zone.ts';
 import { type DeedName, deedOf } from './keys.ts';
 import { KeysDialog } from './keys-dialog.tsx';
-import { LeaveDialog } from './leave-dialog.tsx';
 import { MakeLivePanel } from './make-live-panel.tsx';
-import { MergeDialog } from './merge-dialog.tsx';
 import { PageNotices } from './page-notices.tsx';
 import { PartStrip } from './part-strip.tsx';
 import { type PrintedNumber, printedNumber } from './printed-number.ts';
@@ -27,15 +25,18 @@ import { ReadAgainPanel } from './read-again-panel.tsx';
 import { SaveBar } from './save-bar.tsx';
 import { Toolbar } from './toolbar.tsx';
 import { useDoubtWalk } from './use-doubt-walk.ts';
-import { useDraft } from './use-draft.ts';
+import { useOthers } from './use-others.ts';
 import { usePageEditor } from './use-page-editor.ts';
 import { useSaving } from './use-saving.ts';
+import type { SharedText } from './use-shared-text.ts';
 import { type ZonePlace, zonePlaces } from './zone-place.ts';
 import '#src/blocks/page.css';
 
 type Props = {
   page: Page;
-  document: DocNode;
+  shared: SharedText;
+  /** The person who types. */
+  name: string;
   context: LookContext;
   link: PageLink;
   scan: { pageId: string; version: string; size: { width: number; height: number } | null; label: string };
@@ -44,9 +45,10 @@ type Props = {
   addressOf: (pageId: string) => string;
 };
 
-export function EditedPage({ page, document, context, link, scan, settingBar, links, addressOf }: Props) {
-  const editor = usePageEditor({ document, context, label: 'Page text' });
-  const saving = useSaving(editor, page);
+export function EditedPage({ page, shared, name, context, link, scan, settingBar, links, addressOf }: Props) {
+  const editor = usePageEditor({ shared, context, name, label: 'Page text' });
+  const saving = useSaving(editor, page, shared);
+  const others = useOthers(shared.provider);
   const walk = useDoubtWalk(editor, link.showOnScan);
   const [note, setNote] = useState('');
   const [isKeysOpen, setKeysOpen] = useState(false);
@@ -54,13 +56,10 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
   const [places, setPlaces] = useState<readonly ZonePlace[] | null>(null);
   const { boxes, shown, doubtCount } = usePlaces(editor);
   const goTo = useGoTo(editor, link);
-  useDraft({ editor, pageId: page.id, baseRevision: saving.base.revision, isDirty: () => saving.isDirty });
   useCaretLight(editor, link.setActive);
-  const save = async (): Promise<boolean> => {
+  const save = async (): Promise<void> => {
     if (!saving.isDirty) toast('Nothing has changed since the last revision.');
-    const isSaved = saving.isDirty && (await saving.save(note));
-    if (isSaved) setNote('');
-    return isSaved;
+    else if (await saving.save(note)) setNote('');
   };
   const deeds: Record<DeedName, () => void> = {
     next: () => walk.goBeside(1),
@@ -80,7 +79,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
         {links(saving.isDirty)}
       </PageTitle>
       {settingBar}
-      <PageNotices page={page} saving={saving} />
+      <PageNotices standing={shared.standing} />
       <TwoLeaves
         scan={<ScanViewer {...scan} {...onScan} onPick={(key) => goTo(key, 'text')} />}
         spine={
@@ -94,7 +93,7 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
         }
         page={
           <>
-            <SaveBar {...saving} note={note} onNote={setNote} onSave={deeds.save} />
+            <SaveBar {...saving} others={others} note={note} onNote={setNote} onSave={deeds.save} />
             <Toolbar editor={editor} onMakeLive={deeds.live} onReadAgain={deeds.readAgain} />
             <h2 className="sr-only">Page text</h2>
             <div ref={link.leaf} className="leaf-scroll" onPointerOver={link.onTextHover}>
@@ -116,8 +115,6 @@ export function EditedPage({ page, document, context, link, scan, settingBar, li
         }
       />
       <KeysDialog isOpen={isKeysOpen} onOpenChange={setKeysOpen} />
-      <LeaveDialog isDirty={saving.isDirty} onSave={save} />
-      <MergeDialog editor={editor} saving={saving} note={note} />
     </div>
   );
 }

@@ -1,20 +1,21 @@
-import { Editor } from '@tiptap/core';
+import type {} from '@tiptap/extension-collaboration';
+import type { Editor } from '@tiptap/core';
 import { afterEach, describe, expect, it } from 'vitest';
 import type { DocNode } from '#shared/document/define-block.ts';
 import { readDocument } from '#shared/document/page-document.ts';
 import { everyKind } from '#src/blocks/every-kind.fixture.ts';
 import { choiceAt, chooseBlock } from './block-kinds.ts';
 import { doubtsLike, doubtsOf } from './doubts.ts';
+import { openEditor } from './editor.fixture.ts';
 import { positionOfZone, zoneAtCaret } from './find-zone.ts';
 import { numberAround, printedNumber, putLiveValue } from './printed-number.ts';
 import { keepDoubts } from './settle-doubts.ts';
 import { nextMarker } from './step-marker.ts';
 import { addColumn, deleteColumn, setMeaning, setRowRole, tablePlace } from './table-edits.ts';
-import { editorExtensions } from './use-page-editor.ts';
 
 let editor: Editor;
 function open(content: DocNode = everyKind): Editor {
-  editor = new Editor({ extensions: editorExtensions({ imageOf: () => '' }, false), content });
+  editor = openEditor(content);
   return editor;
 }
 afterEach(() => editor.destroy());
@@ -129,6 +130,17 @@ describe('a table', () => {
       'section tableCell',
       'head tableHeader',
     ]);
+  });
+});
+
+describe('marks', () => {
+  it('are for text alone, so that a break in a bold stretch stays plain', () => {
+    open();
+    editor.chain().selectAll().toggleMark('bold').run();
+    editor.state.doc.descendants((node) => {
+      if (node.isInline && !node.isText) expect(node.marks).toEqual([]);
+    });
+    expect(editor.state.doc.rangeHasMark(1, 10, editor.schema.marks['bold']!)).toBe(true);
   });
 });
 

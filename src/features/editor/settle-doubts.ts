@@ -1,4 +1,5 @@
 import { Extension } from '@tiptap/core';
+import { isChangeOrigin } from '@tiptap/extension-collaboration';
 import type { Node } from '@tiptap/pm/model';
 import { Plugin, type Transaction } from '@tiptap/pm/state';
 import { doubtsOf } from './doubts.ts';
@@ -27,10 +28,9 @@ export const SettleDoubts = Extension.create({
   ],
 });
 
+/** What others typed they have settled themselves, and so it is with what is undone. */
 const isEdit = (transaction: Transaction): boolean =>
-  transaction.getMeta(keepDoubts) === undefined &&
-  transaction.getMeta('history$') === undefined &&
-  transaction.getMeta('preventUpdate') === undefined;
+  transaction.getMeta(keepDoubts) === undefined && !isChangeOrigin(transaction);
 
 /** Where text was put in or taken out, in positions after all the transactions. Marks and attributes change no text. */
 function changedRanges(edit: Transaction, all: readonly Transaction[]): Range[] {

@@ -1,4 +1,5 @@
 import { Extension } from '@tiptap/core';
+import { isChangeOrigin } from '@tiptap/extension-collaboration';
 import { Plugin } from '@tiptap/pm/state';
 
 /** Long enough that two people who add blocks to one page do not hit upon the same name. */
@@ -10,7 +11,8 @@ export const StampBlocks = Extension.create({
   addProseMirrorPlugins: () => [
     new Plugin({
       appendTransaction(transactions, _before, { doc, tr }) {
-        if (!transactions.some(({ docChanged }) => docChanged)) return null;
+        // What others added carries a name from their window.
+        if (!transactions.some((each) => each.docChanged && !isChangeOrigin(each))) return null;
         const seen = new Set<string>();
         doc.forEach((block, position) => {
           const id = block.attrs['id'] as string | null;

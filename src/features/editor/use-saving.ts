@@ -1,96 +1,58 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Editor } from '@tiptap/core';
 import { useEditorState } from '@tiptap/react';
-import { useCallback, useMemo, useState } from 'react';
+import { useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
-import { revision as revisionShape } from '#shared/api/revisions.ts';
-import type { DocNode } from '#shared/document/define-block.ts';
-import { readDocument } from '#shared/document/page-document.ts';
-import { AppError } from '#shared/kit/app-error.ts';
 import { canonical } from '#src/blocks/compare/canonical.ts';
-import { oneRevision, saveDocument } from '#src/api/revisions.ts';
+import { saveTogether } from '#src/api/revisions.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { toast } from '#src/ui/toast.ts';
-import { dropDraft } from './draft.ts';
-import { keepDoubts } from './settle-doubts.ts';
+import type { SharedText } from './use-shared-text.ts';
 
-/** The revision that the text in the editor builds upon. */
-export type Base = { revision: number; document: DocNode };
-/** A revision that somebody else saved meanwhile. */
-export type Theirs = Base & { author: string };
+/** Longer than any answer of a server that can be reached. */
+const longestWaitMs = 5000;
 
-export function useSaving(editor: Editor, page: Page) {
-  const client = useQueryClient();
-  const put = useMutation(saveDocument(client, page.id));
-  const [base, setBase] = useState<Base>(() => ({ revision: page.revision, document: canonical(page.document) }));
-  const [theirs, setTheirs] = useState<Theirs | null>(null);
-  const [fault, setFault] = useState<string | null>(null);
-  const saved = useMemo(() => editor.schema.nodeFromJSON(base.document), [editor, base]);
+/**
+ * Whether the page says something that its newest revision does not, and the making of the next. The text itself is
+ * shared as it is typed; a revision is a state of it that readers see and that the history keeps.
+ */
+export function useSaving(editor: Editor, page: Page, { provider, standing }: SharedText) {
+  const post = useMutation(saveTogether(useQueryClient(), page.id));
+  const saved = useMemo(() => editor.schema.nodeFromJSON(canonical(page.document)), [editor, page.document]);
   const isDirty = useEditorState({ editor, selector: ({ editor: now }) => !now.state.doc.eq(saved) });
-
-  /** Puts another text into the editor; its doubts stay doubts. */
-  const show = useCallback(
-    (document: DocNode) => editor.chain().setMeta(keepDoubts, true).setContent(document, { emitUpdate: true }).run(),
-    [editor],
-  );
-  const save = async (note: string, onto: Base = base): Promise<boolean> => {
-    const document = readDocument(editor.getJSON());
-    if (!document.ok) {
-      setFault(`The page cannot be saved as it stands. ${document.error[0]?.message ?? ''}`);
-      return false;
-    }
-    setFault(null);
-    const sent = editor.state.doc;
+  const save = async (note: string): Promise<boolean> => {
     try {
-      const reply = await put.mutateAsync({
-        baseRevision: onto.revision,
-        document: document.value,
-        ...(note.trim() === '' ? {} : { note: note.trim() }),
-      });
-      setBase({ revision: reply.number, document: canonical(reply.document) });
-      // What was typed while the save was under way is not in it.
-      if (editor.state.doc.eq(sent)) dropDraft(page.id);
-      toast(`Saved as revision ${reply.number}.`);
+      await arrived(provider);
+      const { number } = await post.mutateAsync(note.trim() === '' ? {} : { note: note.trim() });
+      toast(`Saved as revision ${number}.`);
       return true;
     } catch (error) {
-      const current = conflictOf(error);
-      if (current === null) setFault(saidBy(error));
-      else setTheirs(current);
+      toast.error(saidBy(error));
       return false;
     }
   };
-  return {
-    base,
-    setBase,
-    theirs,
-    setTheirs,
-    fault,
-    isDirty,
-    isSaving: put.isPending,
-    save,
-    show,
-    /** Fetches a revision that came meanwhile, to merge it. */
-    lookAtTheirs: async (number: number): Promise<void> => {
-      const { document, author } = await client.fetchQuery(oneRevision(page.id, number));
-      setTheirs({ revision: number, document: canonical(document), author });
-    },
-    /** What came of two edits is put into the editor and saved on top of theirs. */
-    saveMerged: async (merged: DocNode, note: string): Promise<void> => {
-      if (theirs === null) return;
-      setBase(theirs);
-      show(merged);
-      if (await save(note, theirs)) setTheirs(null);
-    },
-  };
+  return { standing, isDirty, isSaving: post.isPending, save };
 }
 
-export type Saving = ReturnType<typeof useSaving>;
-
-/** The server sends the revision that stands there now along with its refusal. */
-function conflictOf(error: unknown): Theirs | null {
-  if (!(error instanceof AppError) || error.code !== 'revision-conflict') return null;
-  const current = revisionShape.safeParse(error.details?.['current']);
-  return current.success
-    ? { revision: current.data.number, document: canonical(current.data.document), author: current.data.author }
-    : null;
+/** Waits until the server has said that it has everything that was typed here. */
+function arrived(provider: SharedText['provider']): Promise<void> {
+  if (!provider.hasUnsyncedChanges) return Promise.resolve();
+  return new Promise((resolve, reject) => {
+    const end = (): void => {
+      clearTimeout(timer);
+      provider.off('unsyncedChanges', look);
+    };
+    const look = (): void => {
+      if (provider.hasUnsyncedChanges) return;
+      end();
+      resolve();
+    };
+    const timer = setTimeout(() => {
+      end();
+      reject(
+        new Error('The server cannot be reached. What you typed is kept in this browser and sent when it is back.'),
+      );
+    }, longestWaitMs);
+    provider.on('unsyncedChanges', look);
+  });
 }

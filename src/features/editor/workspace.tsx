@@ -1,13 +1,11 @@
 import { type ReactNode, useMemo, useState } from 'react';
 import type { Page } from '#shared/api/pages.ts';
-import type { DocNode, Zone } from '#shared/document/define-block.ts';
+import type { Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
-import { PageTitle } from '#src/scan/page-title.tsx';
 import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
-import { ScanViewer } from '#src/scan/scan-viewer.tsx';
-import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
-import { EditedPage } from './edited-page.tsx';
+import { JoinedPage } from './joined-page.tsx';
+import { WaitingDesk } from './waiting-desk.tsx';
 import './editor.css';
 
 type Props = {
@@ -32,29 +30,11 @@ export function Workspace({ page, settingBar, links, addressOf }: Props) {
     [page.imageVersion, page.width, page.height],
   );
   const scan = { pageId: page.id, version, size, label: `Scan of page ${page.label}` };
-  if (page.document !== null) {
-    return (
-      <EditedPage
-        {...{ page, document: page.document as DocNode, context, link, scan, settingBar, links, addressOf }}
-      />
-    );
-  }
+  const frame = { page, scan, links, addressOf };
+  if (page.document !== null) return <JoinedPage {...frame} {...{ context, link, settingBar }} />;
   return (
-    <div className="desk">
-      <PageTitle page={page} doubts={0} addressOf={addressOf}>
-        {links(false)}
-      </PageTitle>
-      <TwoLeaves
-        scan={<ScanViewer {...scan} boxes={[]} active={null} />}
-        spine={<div className="spine" />}
-        page={
-          <div className="leaf-scroll">
-            <div className="page-sheet">
-              <PageWaiting page={page} />
-            </div>
-          </div>
-        }
-      />
-    </div>
+    <WaitingDesk {...frame}>
+      <PageWaiting page={page} />
+    </WaitingDesk>
   );
 }

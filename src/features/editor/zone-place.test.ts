@@ -1,9 +1,10 @@
-import { Editor } from '@tiptap/core';
+import type {} from '@tiptap/extension-collaboration';
+import type { Editor } from '@tiptap/core';
 import { afterEach, describe, expect, it } from 'vitest';
 import type { DocNode } from '#shared/document/define-block.ts';
 import { readWords } from '#shared/reading/words.fixture.ts';
 import { doubtsOf } from './doubts.ts';
-import { editorExtensions } from './use-page-editor.ts';
+import { openEditor } from './editor.fixture.ts';
 import { takeZoneReading, zonePlaces } from './zone-place.ts';
 
 const word = (text: string, zone: number[]): DocNode => ({
@@ -49,7 +50,7 @@ const page: DocNode = {
 
 let editor: Editor;
 function caretAt(text: string): void {
-  editor = new Editor({ extensions: editorExtensions({ imageOf: () => '' }, false), content: page });
+  editor = openEditor(page);
   editor.state.doc.descendants((node, position) => {
     if (node.text === text) editor.commands.setTextSelection(position + 1);
   });

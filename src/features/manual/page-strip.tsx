@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { type ReactNode, useState } from 'react';
 import type { PageSummary } from '#shared/api/pages.ts';
 import { pagesOfManual } from '#src/api/pages.ts';
+import { presenceIn } from '#src/api/presence.ts';
 import { useCan } from '#src/api/session.ts';
 import { counted } from '#shared/kit/counted.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -43,6 +44,7 @@ function Strip({ manualId, pages }: { manualId: string; pages: readonly PageSumm
   const mayEdit = useCan('edit-pages');
   const [wanted, setWanted] = useState<Wanted>('all');
   const [isLabelling, setLabelling] = useState(false);
+  const { data: presence = [] } = useQuery(presenceIn(manualId));
   const shown = pages.filter(wantedPages[wanted]);
   const count = (which: Wanted): number => pages.filter(wantedPages[which]).length;
   return (
@@ -72,7 +74,13 @@ function Strip({ manualId, pages }: { manualId: string; pages: readonly PageSumm
       ) : (
         <ol aria-label="Pages" className="grid grid-cols-[repeat(auto-fill,minmax(148px,1fr))] gap-x-5 gap-y-8">
           {shown.map((page) => (
-            <PageTile key={page.id} manualId={manualId} page={page} isLabelling={isLabelling} />
+            <PageTile
+              key={page.id}
+              manualId={manualId}
+              page={page}
+              people={presence.find(({ pageId }) => pageId === page.id)?.people.map(({ name }) => name) ?? []}
+              isLabelling={isLabelling}
+            />
           ))}
         </ol>
       )}

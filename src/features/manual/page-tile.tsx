@@ -14,10 +14,16 @@ import { pageLooks } from './page-looks.ts';
 
 const thumbnailWidth = 320;
 
-type Props = { manualId: string; page: PageSummary; isLabelling: boolean };
+type Props = {
+  manualId: string;
+  page: PageSummary;
+  /** Who is correcting it at this moment. */
+  people: readonly string[];
+  isLabelling: boolean;
+};
 
 /** One page of the strip: its picture, its name, and what is known about its text. */
-export function PageTile({ manualId, page, isLabelling }: Props) {
+export function PageTile({ manualId, page, people, isLabelling }: Props) {
   const mayEdit = useCan('edit-pages');
   const { id, label, state, confidence, doubtCount, problem, warnings } = page;
   const { word, tone, shape } = pageLooks[state];
@@ -59,6 +65,11 @@ export function PageTile({ manualId, page, isLabelling }: Props) {
         <StateWord tone={tone} shape={shape}>
           {word}
         </StateWord>
+        {people.length === 0 ? null : (
+          <StateWord tone="signal" shape="dot">
+            {`${people.join(', ')} at work`}
+          </StateWord>
+        )}
         {doubtCount === 0 ? null : <span className="doubtful">{counted(doubtCount, 'doubt')}</span>}
         {warnings.map(({ kind }) => (
           <span key={kind} title={warningKinds[kind].says}>
