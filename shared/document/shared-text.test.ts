@@ -3,7 +3,7 @@ import * as Y from 'yjs';
 import type { DocNode } from './define-block.ts';
 import { block, doc, everyKind, paragraph, text } from './documents.fixture.ts';
 import { type PageDocument, readDocument } from './page-document.ts';
-import { documentIn, editTowards, openText, stateOf } from './shared-text.ts';
+import { documentIn, editTowards, keepRoom, openText, stateOf } from './shared-text.ts';
 import { textOf } from './text-of.ts';
 
 function checked(json: DocNode): PageDocument {
@@ -24,6 +24,35 @@ describe('the shared text of a page', () => {
   it('gives back every kind of block, with attributes and marks', () => {
     const page = checked(everyKind());
     expect(heldBy(openText(stateOf(page)))).toEqual(page);
+  });
+
+  it('has one place to write in each empty paragraph, so that two who begin there at once lose nothing', () => {
+    const base = stateOf(checked(doc(line('a', 'one'), block('paragraph', { id: 'b' }))));
+    const [mine, theirs] = [openText(base), openText(base)];
+    const put = (shared: Y.Doc, words: string): void => {
+      const paragraph = shared.getXmlFragment('page').get(1) as Y.XmlElement;
+      const [run] = paragraph.toArray() as [Y.XmlText];
+      run.insert(run.length, words);
+    };
+    put(mine, 'mine');
+    put(theirs, 'theirs');
+    Y.applyUpdate(mine, Y.encodeStateAsUpdate(theirs));
+    expect((mine.getXmlFragment('page').get(1) as Y.XmlElement).length).toBe(1);
+    expect(textOf(heldBy(mine))).toMatch(/^one\n(minetheirs|theirsmine)$/);
+  });
+
+  it('makes such a place in what is added later', () => {
+    const shared = openText(stateOf(checked(doc(line('a', 'one')))));
+    keepRoom(shared);
+    const cell = new Y.XmlElement('tableCell');
+    cell.insert(0, [new Y.XmlElement('paragraph')]);
+    const row = new Y.XmlElement('tableRow');
+    row.insert(0, [cell]);
+    const table = new Y.XmlElement('table');
+    table.insert(0, [row]);
+    shared.getXmlFragment('page').push([table]);
+    expect((cell.get(0) as Y.XmlElement).length).toBe(1);
+    expect(heldBy(shared).content[1]).toMatchObject({ type: 'table', content: [{ content: [{ type: 'tableCell' }] }] });
   });
 
   it('is an empty paragraph where everything was deleted', () => {

@@ -4,6 +4,7 @@ import type { Issue } from '#shared/kit/app-error.ts';
 import type { Result } from '#shared/kit/result.ts';
 import { type PageDocument, readDocument } from './page-document.ts';
 import { nodeOf, pageSchema } from './page-schema.ts';
+import type { BlockKind } from './registry.ts';
 import { currentVersion } from './upgrades.ts';
 
 /** Where the page lies in its shared text. */
@@ -48,5 +49,34 @@ export function editTowards(base: Uint8Array, document: PageDocument): Uint8Arra
   return Y.encodeStateAsUpdate(text, before);
 }
 
-const writeInto = (text: Y.Doc, document: PageDocument): void =>
-  updateYFragment(text, text.getXmlFragment(textField), nodeOf(document), { mapping: new Map(), isOMark: new Map() });
+function writeInto(text: Y.Doc, document: PageDocument): void {
+  const page = text.getXmlFragment(textField);
+  updateYFragment(text, page, nodeOf(document), { mapping: new Map(), isOMark: new Map() });
+  makeRoom(page);
+}
+
+/**
+ * Gives every empty paragraph, heading or cell below an element the run of text that it will have once somebody writes in
+ * it. Otherwise two people who begin at the same time make one each; the two are joined later, and what is written into
+ * the second meanwhile is lost.
+ */
+function makeRoom(element: Y.XmlFragment): void {
+  for (const child of element.toArray()) {
+    if (!(child instanceof Y.XmlElement)) continue;
+    if (pageSchema.nodes[child.nodeName as BlockKind]?.isTextblock !== true) makeRoom(child);
+    else if (child.length === 0) child.insert(0, [new Y.XmlText()]);
+  }
+}
+
+const makingRoom = 'making room';
+
+/** Makes room in whatever is added to a text in this window from now on. */
+export function keepRoom(text: Y.Doc): void {
+  text.on('afterTransaction', ({ local, changed, origin }: Y.Transaction) => {
+    if (!local || origin === makingRoom || changed.size === 0) return;
+    text.transact(() => {
+      for (const type of changed.keys())
+        if (type instanceof Y.XmlFragment && type._item?.deleted !== true) makeRoom(type);
+    }, makingRoom);
+  });
+}

@@ -2,6 +2,7 @@ import { HocuspocusProvider, HocuspocusProviderWebsocket } from '@hocuspocus/pro
 import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
 import * as Y from 'yjs';
 import { coeditingPath } from '#shared/api/presence.ts';
+import { keepRoom } from '#shared/document/shared-text.ts';
 import { keepUnsent } from './unsent-edits.ts';
 
 /** How the window stands to the page's shared text. `away`: what is typed is kept in this browser until the server is back. */
@@ -74,6 +75,7 @@ function join(pageId: string): Joined {
     onAuthenticationFailed: ({ reason }) => become({ standing: 'refused', refusal: reason }),
   });
   provider.attach();
+  keepRoom(text);
   const stopKeeping = keepUnsent(pageId, provider);
   return {
     text,
