@@ -1,3 +1,5 @@
+import { benchCoediting } from './coediting.ts';
+import { benchFrames } from './frames.ts';
 import { benchReading } from './reading.ts';
 import { benchRecognition } from './recognition.ts';
 import { benchRecompute } from './recompute.ts';
@@ -13,6 +15,8 @@ const benches: Record<string, (args: readonly string[]) => Promise<string[]> | s
   workers: benchWorkers,
   recompute: benchRecompute,
   search: benchSearch,
+  frames: benchFrames,
+  coediting: benchCoediting,
 };
 
 const args = process.argv.slice(2);

@@ -49,6 +49,12 @@ export class Writer {
     this.fragment.push([paragraph]);
   }
 
+  /** Types at the end of a paragraph of the page. */
+  append(block: number, words: string): void {
+    const [run] = (this.fragment.get(block) as Y.XmlElement).toArray() as [Y.XmlText];
+    run.insert(run.length, words);
+  }
+
   close(): void {
     this.provider.destroy();
     this.socket.destroy();

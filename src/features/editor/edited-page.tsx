@@ -18,6 +18,7 @@ import { positionOfZone, zoneAtCaret } from './find-zone.ts';
 import { type DeedName, deedOf } from './keys.ts';
 import { KeysDialog } from './keys-dialog.tsx';
 import { MakeLivePanel } from './make-live-panel.tsx';
+import { PageNumbersPanel } from './page-numbers-panel.tsx';
 import { PageNotices } from './page-notices.tsx';
 import { PartStrip } from './part-strip.tsx';
 import { type PrintedNumber, printedNumber } from './printed-number.ts';
@@ -53,6 +54,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
   const [note, setNote] = useState('');
   const [isKeysOpen, setKeysOpen] = useState(false);
   const [live, setLive] = useState<PrintedNumber | string | null>(null);
+  const [areNumbersOpen, setNumbersOpen] = useState(false);
   const [places, setPlaces] = useState<readonly ZonePlace[] | null>(null);
   const { boxes, shown, doubtCount } = usePlaces(editor);
   const goTo = useGoTo(editor, link);
@@ -94,7 +96,12 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
         page={
           <>
             <SaveBar {...saving} others={others} note={note} onNote={setNote} onSave={deeds.save} />
-            <Toolbar editor={editor} onMakeLive={deeds.live} onReadAgain={deeds.readAgain} />
+            <Toolbar
+              editor={editor}
+              onMakeLive={deeds.live}
+              onNumbers={() => setNumbersOpen(true)}
+              onReadAgain={deeds.readAgain}
+            />
             <h2 className="sr-only">Page text</h2>
             <div ref={link.leaf} className="leaf-scroll" onPointerOver={link.onTextHover}>
               <EditorContent editor={editor} className="page-sheet" />
@@ -106,6 +113,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
             {live === null ? null : (
               <MakeLivePanel {...{ editor, page }} key={keyOf(live)} found={live} onClose={() => setLive(null)} />
             )}
+            {areNumbersOpen ? <PageNumbersPanel {...{ editor, page }} onClose={() => setNumbersOpen(false)} /> : null}
             {places === null ? null : (
               <ReadAgainPanel {...{ editor, page, places }} key={keyOfPlaces(places)} onClose={() => setPlaces(null)} />
             )}

@@ -9,7 +9,9 @@ import { Button } from '#src/ui/button.tsx';
 import { Field, Select } from '#src/ui/field.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
 import type { PrintedNumber } from './printed-number.ts';
+import { type QuantityDraft, inputFrom, printedUnit } from './quantity-from-print.ts';
 import { type Trial, tryQuantity } from './propose-quantity.ts';
+import { relationsAmong } from './propose-relations.ts';
 
 type Props = {
   store: LiveStore;
@@ -19,7 +21,6 @@ type Props = {
   onMade: (quantity: Quantity) => void;
 };
 type QuantityKind = QuantityInput['kind'];
-type Draft = { label: string; symbol: string; kind: QuantityKind; unit: string; expression: string };
 
 const kinds: readonly { value: QuantityKind; label: string }[] = [
   { value: 'derived', label: 'Worked out from others' },
@@ -31,16 +32,16 @@ const kinds: readonly { value: QuantityKind; label: string }[] = [
 export function NewQuantityForm({ store, manualId, pageId, found, onMade }: Props) {
   const client = useQueryClient();
   const add = useMutation(addQuantity(client, manualId));
-  const [draft, setDraft] = useState<Draft>(() => ({
+  const [draft, setDraft] = useState<QuantityDraft>(() => ({
     ...proposeName(
       found.before,
       store.quantities.map(({ symbol }) => symbol),
     ),
     kind: 'derived',
     unit: printedUnit(found),
-    expression: '',
+    expression: relationsAmong(store, [found])[0] ?? '',
   }));
-  const change = (part: Partial<Draft>): void => setDraft((before) => ({ ...before, ...part }));
+  const change = (part: Partial<QuantityDraft>): void => setDraft((before) => ({ ...before, ...part }));
   const input = inputFrom(draft, found, pageId);
   const checked = quantityInput.safeParse(input);
   const issueAt = (path: string): string | undefined =>
@@ -128,30 +129,6 @@ function ExpressionField({ store: { quantities }, value, onChange }: ExpressionP
       onChange={({ currentTarget }) => onChange(currentTarget.value)}
     />
   );
-}
-
-/** The unit in the spelling of the page: `mc` where the page says mc. */
-function printedUnit({ text, parsed }: PrintedNumber): string {
-  const behind = /^[\s]*([A-Za-zµμΩ°%/]+)/.exec(text.slice(parsed.layout.end))?.[1];
-  return parsed.unit === '' ? '' : (behind ?? parsed.unit);
-}
-
-function inputFrom(
-  { label, symbol, kind, unit, expression }: Draft,
-  { text, zone, parsed }: PrintedNumber,
-  pageId: string,
-): QuantityInput {
-  return {
-    label: label.trim(),
-    symbol: symbol.trim(),
-    kind,
-    unit: unit.trim(),
-    printed: { text },
-    pageId,
-    zone,
-    ...(kind === 'derived' ? { expression } : { home: text.replace(/\s?±.*$/, '') }),
-    ...(kind === 'input' && unit.trim() === '' && Number.isInteger(parsed.magnitude) ? { integer: true } : {}),
-  };
 }
 
 function TrialSays({ trial, expression, printed }: { trial: Trial; expression: string; printed: string }) {

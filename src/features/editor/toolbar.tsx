@@ -8,10 +8,10 @@ import { inputLook } from '#src/ui/field.tsx';
 import { type BlockChoice, blockChoices, choiceAt, chooseBlock } from './block-kinds.ts';
 import { addColumn, deleteColumn, setTableKind, tablePlace } from './table-edits.ts';
 
-type Props = { editor: Editor; onMakeLive: () => void; onReadAgain: () => void };
+type Props = { editor: Editor; onMakeLive: () => void; onNumbers: () => void; onReadAgain: () => void };
 
 /** What can be done with the text, in words. Tools for tables appear when the caret is in one. */
-export function Toolbar({ editor, onMakeLive, onReadAgain }: Props) {
+export function Toolbar({ editor, onMakeLive, onNumbers, onReadAgain }: Props) {
   const state = useEditorState({
     editor,
     selector: ({ editor: now }) => ({
@@ -58,6 +58,9 @@ export function Toolbar({ editor, onMakeLive, onReadAgain }: Props) {
       </Button>
       <Button onMouseDown={keepCaret} onClick={onMakeLive}>
         Make live
+      </Button>
+      <Button onMouseDown={keepCaret} onClick={onNumbers}>
+        All numbers
       </Button>
       <Button onMouseDown={keepCaret} onClick={onReadAgain}>
         Read again
