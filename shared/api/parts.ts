@@ -4,10 +4,14 @@ import { defineEndpoint } from './endpoint.ts';
 
 export const partRow = z.object({
   refDes: z.string(),
+  /** With ranges written out. */
+  designators: z.array(z.string()),
   partNumber: z.string(),
   description: z.string(),
   quantity: z.string(),
   value: z.object({ magnitude: z.number(), unit: z.string(), tolerance: z.string().nullable() }).nullable(),
+  /** The designator of the part that this one is said to be the same as. */
+  sameAs: z.string().nullable(),
   pageId: id,
   pageLabel: z.string(),
   tableId: z.string(),

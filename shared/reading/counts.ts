@@ -1,3 +1,4 @@
+import { designatorsIn } from '#shared/document/designator-list.ts';
 import type { Mended } from './mended.ts';
 import type { ReadingWord } from './reading.ts';
 
@@ -46,18 +47,5 @@ function countsFollow(cells: readonly CountedCell[]): boolean {
   return agreeing >= fewestAgreeing && agreeing >= checks.length * leastAgreeing;
 }
 
-const name = /^([A-Z]{1,2})(\d{1,4})[A-Z]?$/;
-
 /** How many parts a cell of designators names: "C1" one, "C1, C4" two, "R1-R4" four. Null where that is not clear. */
-export function countOf(designators: string): number | null {
-  let count = 0;
-  for (const part of designators.split(/[,;]\s*|\s+/).filter((each) => each !== '')) {
-    const [from, to, ...more] = part.split(/[-–]/).map((each) => name.exec(each));
-    if (from === null || from === undefined || to === null || more.length > 0) return null;
-    if (to !== undefined && to[1] !== from[1]) return null;
-    const last = to === undefined ? Number(from[2]) : Number(to[2]);
-    if (last < Number(from[2])) return null;
-    count += last - Number(from[2]) + 1;
-  }
-  return count > 0 && count <= 200 ? count : null;
-}
+export const countOf = (designators: string): number | null => designatorsIn(designators)?.length ?? null;

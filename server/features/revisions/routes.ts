@@ -2,7 +2,7 @@ import { stringify } from 'csv-stringify/sync';
 import * as pageApi from '#shared/api/pages.ts';
 import * as partApi from '#shared/api/parts.ts';
 import * as revisionApi from '#shared/api/revisions.ts';
-import { partsOf } from '#shared/document/parts.ts';
+import { partsOfManual } from '#shared/document/parts-of-manual.ts';
 import { tablesOf } from '#shared/document/tables.ts';
 import { textOf } from '#shared/document/text-of.ts';
 import { blockZones } from '#shared/document/zones.ts';
@@ -83,9 +83,7 @@ const csvColumns = [
 function partRoutes(api: ApiRouter, { db }: Tools): void {
   serveRaw(api, partApi.listParts, ({ params, query, response }) => {
     const manual = existingManual(db, params.manualId);
-    const parts = documentsOfManual(db, params.manualId).flatMap(({ pageId, label, document }) =>
-      partsOf(document).map((part) => ({ ...part, pageId, pageLabel: label })),
-    );
+    const parts = partsOfManual(documentsOfManual(db, params.manualId));
     if (query.format === 'csv') {
       const rows = parts.map((part) => [
         ...[part.refDes, part.partNumber, part.description, part.quantity],

@@ -11,7 +11,9 @@ import { positionOfZone, zoneAtCaret } from './find-zone.ts';
 import { numberAround, printedNumber, putLiveValue } from './printed-number.ts';
 import { keepDoubts } from './settle-doubts.ts';
 import { nextMarker } from './step-marker.ts';
+import { Slice } from '@tiptap/pm/model';
 import { addColumn, deleteColumn, setMeaning, setRowRole, tablePlace } from './table-edits.ts';
+import { plainTable, tableAsCsv, takeRows } from './table-transfer.ts';
 
 let editor: Editor;
 function open(content: DocNode = everyKind): Editor {
@@ -129,6 +131,47 @@ describe('a table', () => {
       'head tableHeader',
       'section tableCell',
       'head tableHeader',
+    ]);
+  });
+});
+
+describe('rows from outside', () => {
+  const rows = () => plainTable(tablePlace(editor)!).rows;
+
+  it('are put into the table in one step', () => {
+    open();
+    caretBehind('R1');
+    takeRows(editor, tablePlace(editor)!, [
+      { kind: 'changed', at: 0, cells: ['R1', 'Grid, 120K'], was: ['R1', 'Grid, 100K'] },
+      { kind: 'new', cells: ['R2', ''] },
+    ]);
+    expect(rows()).toEqual([
+      ['R1', 'Grid, 120K'],
+      ['R2', ''],
+    ]);
+    expect(readDocument(editor.getJSON()).ok).toBe(true);
+    editor.commands.undo();
+    expect(rows()).toEqual([['R1', 'Grid, 100K']]);
+  });
+
+  it('go out as they stand, with nothing that a spreadsheet would compute', () => {
+    open();
+    caretBehind('R1');
+    editor.commands.insertContent('=1+1');
+    expect(tableAsCsv(tablePlace(editor)!)).toBe('REF. DES.,DESCRIPTION\nR1=1+1,"Grid, 100K"\n');
+    takeRows(editor, tablePlace(editor)!, [{ kind: 'new', cells: ['=1+1', ''] }]);
+    expect(tableAsCsv(tablePlace(editor)!).split('\n')[2]).toBe("'=1+1,");
+  });
+
+  it('fill the cells from the caret on when they are pasted as a spreadsheet gives them', () => {
+    open();
+    caretBehind('R1');
+    const given: Record<string, string> = { 'text/plain': 'R7\tPlate, 22K\r\nR8\tScreen\r\n' };
+    const event = { clipboardData: { getData: (type: string) => given[type] ?? '' } } as unknown as ClipboardEvent;
+    editor.view.someProp('handlePaste', (handle) => handle(editor.view, event, Slice.empty));
+    expect(rows()).toEqual([
+      ['R7', 'Plate, 22K'],
+      ['R8', 'Screen'],
     ]);
   });
 });

@@ -1,12 +1,11 @@
 import type { Editor } from '@tiptap/core';
 import { useEditorState } from '@tiptap/react';
 import type { ReactNode } from 'react';
-import { tableKinds } from '#shared/document/blocks/table.ts';
-import { tableWords } from '#src/blocks/trade-words.ts';
 import { Button } from '#src/ui/button.tsx';
 import { inputLook } from '#src/ui/field.tsx';
 import { type BlockChoice, blockChoices, choiceAt, chooseBlock } from './block-kinds.ts';
-import { addColumn, deleteColumn, setTableKind, tablePlace } from './table-edits.ts';
+import { keepCaret } from './keep-caret.ts';
+import { TableTools } from './table-tools.tsx';
 
 type Props = { editor: Editor; onMakeLive: () => void; onNumbers: () => void; onReadAgain: () => void };
 
@@ -70,9 +69,6 @@ export function Toolbar({ editor, onMakeLive, onNumbers, onReadAgain }: Props) {
   );
 }
 
-/** A press on a tool leaves the caret where it is. */
-const keepCaret = (event: { preventDefault: () => void }): void => event.preventDefault();
-
 const Tool = ({ isOn, onPress, children }: { isOn: boolean; onPress: () => void; children: ReactNode }) => (
   <Button
     aria-pressed={isOn}
@@ -106,40 +102,3 @@ function StepTools({ editor, marker, depth }: { editor: Editor; marker: string; 
     </>
   );
 }
-
-function TableTools({ editor, kind }: { editor: Editor; kind: string }) {
-  const deeds: readonly [string, () => boolean][] = [
-    ['Row above', () => editor.chain().focus().addRowBefore().run()],
-    ['Row below', () => editor.chain().focus().addRowAfter().run()],
-    ['Delete row', () => deleteRow(editor)],
-    ['Column before', () => addColumn(editor, 'before')],
-    ['Column after', () => addColumn(editor, 'after')],
-    ['Delete column', () => deleteColumn(editor)],
-  ];
-  return (
-    <div role="group" aria-label="Table tools" className="leaf-tools-row">
-      <select
-        aria-label="Kind of table"
-        className={`${inputLook} w-auto!`}
-        value={kind}
-        onChange={({ currentTarget }) => setTableKind(editor, currentTarget.value)}
-      >
-        {tableKinds.map((each) => (
-          <option key={each} value={each}>
-            {tableWords[each]}
-          </option>
-        ))}
-      </select>
-      {deeds.map(([label, deed]) => (
-        <Button key={label} onMouseDown={keepCaret} onClick={deed}>
-          {label}
-        </Button>
-      ))}
-    </div>
-  );
-}
-
-const deleteRow = (editor: Editor): boolean =>
-  tablePlace(editor)?.table.childCount === 1
-    ? editor.chain().focus().deleteTable().run()
-    : editor.chain().focus().deleteRow().run();

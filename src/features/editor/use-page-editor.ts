@@ -10,6 +10,7 @@ import type { LookContext } from '#src/blocks/look.ts';
 import { BlockKeys } from './block-keys.ts';
 import { ColumnHeads } from './column-heads.ts';
 import { drawCaret, markSelection } from './others-carets.ts';
+import { PasteRows } from './paste-rows.ts';
 import { PlainAtoms } from './plain-atoms.ts';
 import { PlainSpaces } from './plain-spaces.ts';
 import { SettleDoubts } from './settle-doubts.ts';
@@ -23,6 +24,7 @@ export const editorExtensions = (text: Doc, context: LookContext, withViews = tr
   Gapcursor,
   PlainSpaces,
   PlainAtoms,
+  PasteRows,
   SettleDoubts,
   StampBlocks,
   ColumnHeads,

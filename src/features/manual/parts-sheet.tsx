@@ -50,8 +50,10 @@ export function PartsSheet({ manualId }: { manualId: string }) {
 
 function Parts({ manualId, parts }: { manualId: string; parts: readonly Part[] }) {
   const [filter, setFilter] = useState('');
+  const [areOdd, setOdd] = useState(false);
   const [most, setMost] = useState(rowsAtOnce);
-  const found = matching(parts, filter);
+  const odd = parts.filter(({ problems }) => problems.length > 0);
+  const found = matching(areOdd ? odd : parts, filter);
   const shown = found.slice(0, most);
   const room = roomFor(shown.map(magnitudeOf));
   return (
@@ -66,8 +68,15 @@ function Parts({ manualId, parts }: { manualId: string; parts: readonly Part[] }
           className={`${inputLook} flex-1 basis-48 sm:max-w-72`}
         />
         <p role="status" className="text-pencil">
-          {filter === '' ? counted(parts.length, 'row') : `${found.length} of ${counted(parts.length, 'row')}`}
+          {filter === '' && !areOdd
+            ? counted(parts.length, 'row')
+            : `${found.length} of ${counted(parts.length, 'row')}`}
         </p>
+        {odd.length === 0 ? null : (
+          <Button aria-pressed={areOdd} onClick={() => setOdd(!areOdd)}>
+            {areOdd ? 'Show all rows' : `Show ${counted(odd.length, 'row')} with a problem`}
+          </Button>
+        )}
         <Button asChild className="ml-auto">
           <a href={partsAsCsv(manualId)} download>
             Download as CSV
@@ -77,7 +86,16 @@ function Parts({ manualId, parts }: { manualId: string; parts: readonly Part[] }
       {found.length === 0 ? (
         <Empty
           title={`No part has “${filter}”`}
-          action={<Button onClick={() => setFilter('')}>Show all parts</Button>}
+          action={
+            <Button
+              onClick={() => {
+                setFilter('');
+                setOdd(false);
+              }}
+            >
+              Show all parts
+            </Button>
+          }
         />
       ) : (
         <RuledTable caption="Parts" head={<PartsHead />}>
@@ -107,13 +125,16 @@ const PartsHead = () => (
 );
 
 function PartRow({ part, room }: { part: Part; room: Room }) {
-  const { refDes, partNumber, description, quantity, value, pageId, pageLabel, problems } = part;
+  const { refDes, partNumber, description, quantity, value, sameAs, pageId, pageLabel, problems } = part;
   return (
     <tr>
       <Td className="figures max-w-48 min-w-24 font-semibold">{refDes}</Td>
       <Td className="figures whitespace-nowrap">{partNumber}</Td>
       <Td className="min-w-56">
         {description}
+        {sameAs === null || value === null ? null : (
+          <p className="text-small text-pencil">{`value and number of ${sameAs}`}</p>
+        )}
         {problems.map((problem) => (
           <p key={problem} className="text-small text-doubt">
             <span aria-hidden="true">? </span>
