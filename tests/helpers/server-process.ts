@@ -77,7 +77,9 @@ export function freePort(): Promise<number> {
     probe.on('error', reject);
     probe.listen(0, '127.0.0.1', () => {
       const address = probe.address();
-      probe.close(() => (typeof address === 'object' && address !== null ? resolve(address.port) : reject()));
+      probe.close(() =>
+        typeof address === 'object' && address !== null ? resolve(address.port) : reject(new Error('no port')),
+      );
     });
   });
 }
