@@ -5,6 +5,7 @@ import { zone } from './define-block.ts';
 export const doubtReasons = {
   'low-confidence': 'Recognition was unsure of this',
   'sign-guessed': 'The sign was worked out from the unit, not read',
+  'looks-otherwise': 'Its figures look like others of the page than it was read as',
   'read-differently': 'Another reading of the scan says otherwise',
   'corrected-elsewhere': 'The same reading was corrected on another page of this manual',
   'odd-part-number': 'No part number on the corrected pages has this shape',

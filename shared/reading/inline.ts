@@ -14,8 +14,11 @@ const markOf = (word: ReadingWord): Mark[] => {
   return [place, { type: 'doubt', attrs: doubt }];
 };
 
+/** A number that the page's other figures made into another one. */
+const isNumberSeen = ({ seen, text }: ReadingWord): boolean => seen === text && /^[\d.,$%()-]+$/.test(text);
+
 function doubtReason(word: ReadingWord): DoubtMark['reason'] | null {
-  if (word.raw !== word.text && word.sure !== true) return 'sign-guessed';
+  if (word.raw !== word.text && word.sure !== true) return isNumberSeen(word) ? 'looks-otherwise' : 'sign-guessed';
   if (trustIn(word) < doubtBelow) return 'low-confidence';
   return /\d[:;]\d|\d[.,]{2}\d|\d,\d{1,2}$|\d,\d{4,}/.test(word.text) ? 'odd-number' : null;
 }

@@ -2,6 +2,8 @@ import { writeFile } from 'node:fs/promises';
 import { OPS, type PDFDocumentProxy, type PDFPageProxy } from 'pdfjs-dist/legacy/build/pdf.mjs';
 import sharp, { type OutputInfo, type Sharp } from 'sharp';
 import type { Zone } from '#shared/document/define-block.ts';
+import { flatten } from '#shared/reading/picture/flatten.ts';
+import { dpiByType } from '#shared/reading/picture/type-size.ts';
 import type { TextLayer } from '#shared/reading/text-layer.ts';
 import { openPdf, pdfProblem } from './pdf.ts';
 import { textLayerOf } from './text-layer.ts';
@@ -44,7 +46,7 @@ async function drawPicture({ path, sourcePage, part, target, mostMegapixels }: D
     const { density } = await sharp(path, options).metadata();
     const upright = sharp(path, options).autoOrient().flatten({ background: 'white' }).toColourspace('srgb');
     const { width, height } = await writePicture(upright, part, target);
-    return { width, height, dpi: believableDpi(density, height), hasLayer: false };
+    return { width, height, dpi: statedDpi(density, height) ?? (await dpiOf(target, height)), hasLayer: false };
   } catch (error) {
     throw new HopelessPage(
       `This picture cannot be decoded: ${error instanceof Error ? firstLine(error.message) : 'unknown fault'}.`,
@@ -54,13 +56,24 @@ async function drawPicture({ path, sourcePage, part, target, mostMegapixels }: D
 
 const firstLine = (text: string): string => (text.split('\n')[0] ?? '').slice(0, 120);
 
-/** Many scans carry no density, or one that was never true; a sheet is taken to be about 11 inches high then. */
-export function believableDpi(density: number | undefined, height: number): number {
-  const usualSheetInches = 11;
-  const guessed = Math.min(600, Math.max(75, Math.round(height / usualSheetInches)));
-  if (density === undefined) return guessed;
+/** The density that a picture states; null where it states none, or one that was never true. */
+function statedDpi(density: number | undefined, height: number): number | null {
+  if (density === undefined || density < 100 || density > 1200) return null;
   const inches = height / density;
-  return density >= 100 && density <= 1200 && inches > 2 && inches < 40 ? density : guessed;
+  return inches > 2 && inches < 40 ? density : null;
+}
+
+/** A sheet that does not tell its resolution is taken to be about 11 inches high, or less where its type says so. */
+async function dpiOf(drawn: string, height: number): Promise<number> {
+  const usualSheetInches = 11;
+  const guess = Math.min(600, Math.max(75, Math.round(height / usualSheetInches)));
+  const { data, info } = await sharp(drawn)
+    .greyscale()
+    .toColourspace('b-w')
+    .raw()
+    .toBuffer({ resolveWithObject: true });
+  const even = flatten({ width: info.width, height: info.height, data: new Uint8Array(data) });
+  return Math.min(600, dpiByType(even, guess));
 }
 
 let opened: { path: string; pdf: PDFDocumentProxy } | null = null;

@@ -4,6 +4,7 @@ import { mendBullets } from '#shared/reading/bullets.ts';
 import { inReadingOrder } from '#shared/reading/columns.ts';
 import { findTables, isWellFilled } from '#shared/reading/find-tables.ts';
 import { wholeFigures } from '#shared/reading/figure-zones.ts';
+import { withDigitsLookedAt } from '#shared/reading/digits/look-at-digits.ts';
 import { lookedAt } from '#shared/reading/glyphs/look.ts';
 import { mendTables } from '#shared/reading/mend-tables.ts';
 import { findFigures, overlap } from '#shared/reading/picture/figures.ts';
@@ -107,7 +108,7 @@ async function secondLooks(
   const { scale, clean, lined } = prepared;
   const page = { picture: clean, scale, dpi: dpiForEngine(prepared) };
   const withMargins = await readMargins(read, unreadIn(prepared, read), page);
-  const withCells = await rereadCells(withMargins, page);
+  const withCells = withDigitsLookedAt(await rereadCells(withMargins, page), page);
   const repaired = repairWords(withCells);
   const figures = wholeFigures(figuresOf(prepared, repaired), withoutSpecks(repaired), prepared.shown.dpi);
   const labelled = await rereadFigures(withCells, figures, { ...page, picture: lined });
