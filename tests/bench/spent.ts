@@ -19,3 +19,10 @@ export function cpuOf(process: number | 'self', whose: keyof typeof fields = 'ow
   const stat = readFileSync(`/proc/${process}/stat`, 'utf8').split(') ')[1]?.split(' ') ?? [];
   return fields[whose].reduce((sum, at) => sum + Number(stat[at] ?? 0), 0) / ticksASecond;
 }
+
+/** Processor time that everything on the machine has taken so far, in seconds: all but idling and waiting. Linux only. */
+export function machineCpu(): number {
+  const [all = ''] = readFileSync('/proc/stat', 'utf8').split('\n');
+  const [user = 0, nice = 0, system = 0, , , irq = 0, softIrq = 0] = all.trim().split(/\s+/).slice(1).map(Number);
+  return (user + nice + system + irq + softIrq) / ticksASecond;
+}
