@@ -36,12 +36,14 @@ export async function readPlainly(engine: Worker, file: string): Promise<Hypothe
   return { text: data.text, words };
 }
 
+const nativeProgram = process.env['TESSERACT'] ?? 'tesseract';
+
 /** Native Tesseract with its defaults, one thread, a process a page: reads `file` to `results/id.tsv` and tells what processor time that took. */
 export type NativeEngine = { name: string; read: (file: string, id: string) => number };
 
 /** Null where it is not installed. */
 export function nativeEngine(results: string): NativeEngine | null {
-  const { stdout, error } = spawnSync('tesseract', ['--version'], { encoding: 'utf8' });
+  const { stdout, error } = spawnSync(nativeProgram, ['--version'], { encoding: 'utf8' });
   if (error !== undefined) return null;
   const data = path.join(results, 'data');
   mkdirSync(data, { recursive: true });
@@ -53,8 +55,8 @@ export function nativeEngine(results: string): NativeEngine | null {
     read(file, id) {
       const asked = [file, path.join(results, id), '-l', 'eng', '-c', 'tessedit_create_tsv=1'];
       const from = cpuOf('self', 'ended');
-      const { status, stderr } = spawnSync('tesseract', asked, { env, encoding: 'utf8' });
-      if (status !== 0) throw new Error(`tesseract could not read ${file}: ${stderr}`);
+      const { status, stderr } = spawnSync(nativeProgram, asked, { env, encoding: 'utf8' });
+      if (status !== 0) throw new Error(`${nativeProgram} could not read ${file}: ${stderr}`);
       return cpuOf('self', 'ended') - from;
     },
   };
