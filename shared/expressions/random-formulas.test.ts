@@ -158,7 +158,7 @@ describe('flat code', () => {
       }),
       { numRuns: 10_000 },
     );
-  });
+  }, 60_000);
 });
 
 describe('slopes', () => {
