@@ -1,7 +1,10 @@
+import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
+import { resolver } from '#shared/document/cross-references.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
+import { targetsIn } from '#src/api/references.ts';
 import { zoneKey } from '#src/blocks/look.ts';
 import { PageView } from '#src/blocks/page-view.tsx';
 import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
@@ -24,6 +27,8 @@ export function ReadPage({ page, hits, query }: Props) {
     () => ({ imageOf: (zone: Zone) => imageOf(page.id, { zone, v: version }) }),
     [page.id, version],
   );
+  const { data: targets } = useQuery(targetsIn(page.manualId));
+  const resolve = useMemo(() => (targets === undefined ? null : resolver(targets)), [targets]);
   const boxes = useMemo(() => (document === null ? [] : boxesOf(document)), [document]);
   const shown = useMemo(
     () => [...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
@@ -73,7 +78,7 @@ export function ReadPage({ page, hits, query }: Props) {
             {document === null ? (
               <PageWaiting page={page} />
             ) : (
-              <PageView document={document} context={context} query={query} />
+              <PageView document={document} context={context} query={query} resolve={resolve} />
             )}
           </div>
         </div>
