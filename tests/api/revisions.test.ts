@@ -155,6 +155,16 @@ describe('references', () => {
   });
 });
 
+describe('page numbers', () => {
+  it('are found in the running feet', async () => {
+    await save(0, doc({ type: 'running', attrs: { place: 'foot' }, content: [text('5-3')] }, paragraph(text('x'))));
+    expect((await editor.get(`/api/manuals/${manualId}/page-numbers`)).body).toEqual({
+      pages: [{ pageId, label: '1', printed: '5-3' }],
+      problems: [],
+    });
+  });
+});
+
 describe('searching', () => {
   const search = async (query: string) =>
     (await (await server.as('reader')).get(`/api/search?${query}&manualId=${manualId}`)).body;

@@ -1,6 +1,8 @@
 import { eq, sql } from 'drizzle-orm';
+import { getPageNumbers } from '#shared/api/page-numbers.ts';
 import { listOpenReferences, listTargets } from '#shared/api/references.ts';
 import { type Target, openReferences, resolver, targetsOf } from '#shared/document/cross-references.ts';
+import { pageNumbersOf } from '#shared/document/page-numbers.ts';
 import { partsOfManual } from '#shared/document/parts-of-manual.ts';
 import { pages, revisions } from '#server/db/schema/index.ts';
 import { existingManual } from '#server/features/manuals/index.ts';
@@ -19,6 +21,10 @@ export function referenceRoutes(api: ApiRouter, { db }: Tools): void {
     existingManual(db, params.manualId);
     const resolve = resolver(targetsIn(params.manualId));
     return { items: openReferences(documentsOfManual(db, params.manualId), resolve), nextCursor: null };
+  });
+  serve(api, getPageNumbers, ({ params }) => {
+    existingManual(db, params.manualId);
+    return pageNumbersOf(documentsOfManual(db, params.manualId));
   });
 }
 
