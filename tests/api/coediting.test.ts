@@ -175,6 +175,19 @@ describe('who may not write', () => {
   });
 });
 
+describe('a manual that is put in the bin while its page is open', () => {
+  it('has what they wrote when it is taken back out', async () => {
+    const one = await write(editor);
+    one.add('Before the bin.');
+    await arrived(one);
+    await archivist.delete(`/api/manuals/${manualId}`);
+    const { status } = await archivist.post(`/api/manuals/${manualId}/restore`);
+    expect(status).toBe(200);
+    await editor.post(at('/revisions'));
+    expect(await textNow()).toBe('Set the dial.\nTune L5.\nBefore the bin.');
+  });
+});
+
 describe('presence', () => {
   it('names who has which page open to correct it, and forgets them when they leave', async () => {
     const one = await write(editor);

@@ -1,4 +1,4 @@
-import { Hocuspocus } from '@hocuspocus/server';
+import { type Document, Hocuspocus } from '@hocuspocus/server';
 import { AppError } from '#shared/kit/app-error.ts';
 import { pagesWithPendingEdits, saveTogether } from '#server/features/revisions/index.ts';
 import type { Tools } from '#server/http/tools.ts';
@@ -20,7 +20,7 @@ export function createSharedPages(tools: Tools): SharedPages {
     if (event.type !== 'page') return;
     // A revision may have come another way than through the shared text.
     const text = hocuspocus.documents.get(event.page.id);
-    if (text !== undefined) takeInStored(tools, text);
+    if (text !== undefined) followRevision(tools, { hocuspocus, text });
   });
   // What was being written when the server last stopped.
   for (const pageId of pagesWithPendingEdits(tools.db)) quiet.stir(pageId);
@@ -33,6 +33,18 @@ export function createSharedPages(tools: Tools): SharedPages {
       hocuspocus.closeConnections();
     },
   };
+}
+
+type Open = { hocuspocus: Hocuspocus<Seat>; text: Document };
+
+/** Whoever has a page open whose manual was put in the bin meanwhile is sent away; what they typed is kept. */
+function followRevision(tools: Tools, { hocuspocus, text }: Open): void {
+  try {
+    takeInStored(tools, text);
+  } catch (error) {
+    if (!(error instanceof AppError)) throw error;
+    hocuspocus.closeConnections(text.name);
+  }
 }
 
 /** What cannot be kept as a page stays with the shared text, and is tried again when somebody next leaves it. */
