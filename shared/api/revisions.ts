@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { id, listOf, listQuery, pageParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
-import { documentJson } from './pages.ts';
+import { documentJson, page } from './pages.ts';
 
 export const revisionOrigins = ['machine', 'person'] as const;
 
@@ -67,4 +67,24 @@ export const restoreRevision = defineEndpoint({
   params: oneParams,
   body: z.object({ note }).optional(),
   reply: revision,
+});
+
+export const signPage = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/proofed',
+  summary:
+    'Sign a page off as proofed; its newest text must be by others. Doubts that are left must be named by their count',
+  action: 'edit-pages',
+  params: pageParams,
+  body: z.object({ revision: z.number().int().positive(), doubts: z.number().int().nonnegative().default(0) }),
+  reply: page,
+});
+
+export const takeBackSignature = defineEndpoint({
+  method: 'delete',
+  path: '/api/pages/:pageId/proofed',
+  summary: 'Take back that a page is proofed',
+  action: 'edit-pages',
+  params: pageParams,
+  reply: page,
 });

@@ -30,3 +30,18 @@ export const restoreRevision = (client: QueryClient, pageId: string) =>
       call(api.restoreRevision, { params: { pageId, number }, body: note === undefined ? {} : { note } }),
     onSuccess: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
   });
+
+/** A page changes for everybody who looks at it when it is signed; what the server answers is shown at once. */
+export const signPage = (client: QueryClient, pageId: string) =>
+  mutationOptions({
+    mutationFn: (body: { revision: number; doubts: number }) => call(api.signPage, { params: { pageId }, body }),
+    onSuccess: (page) => client.setQueryData(pageKeys.one(pageId), page),
+    onError: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });
+
+export const takeBackSignature = (client: QueryClient, pageId: string) =>
+  mutationOptions({
+    mutationFn: () => call(api.takeBackSignature, { params: { pageId } }),
+    onSuccess: (page) => client.setQueryData(pageKeys.one(pageId), page),
+    onError: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });

@@ -2,11 +2,13 @@ import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
 import { Link, useNavigate } from 'react-router';
 import type { Page, PageState, PageSummary } from '#shared/api/pages.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { oneManual } from '#src/api/manuals.ts';
 import { pagesOfManual } from '#src/api/pages.ts';
 import type { LiveStore } from '#src/blocks/live-value/live-store.ts';
 import { useLiveStore } from '#src/blocks/live-value/live-values.tsx';
 import { useSettingWords } from '#src/blocks/live-value/setting-words.ts';
+import { writtenDay } from '#src/lib/written.ts';
 import { Button } from '#src/ui/button.tsx';
 import { inputLook } from '#src/ui/field.tsx';
 import { type Shape, StateWord, type Tone } from '#src/ui/state-word.tsx';
@@ -36,6 +38,7 @@ export function PageTitle({ page, doubts, addressOf, children }: Props) {
   const store = useLiveStore();
   const setting = useSettingWords(page.manualId);
   const { word, tone, shape } = stateWords[page.state];
+  const { signOff } = page;
   return (
     <TitleBlock
       kind={manual === undefined ? 'Page' : [manual.maker, manual.documentNumber].filter(Boolean).join(', ') || 'Page'}
@@ -62,6 +65,7 @@ export function PageTitle({ page, doubts, addressOf, children }: Props) {
           ),
           stays: true,
         },
+        ...(signOff === null ? [] : [{ label: 'Signed off', value: <Signature signOff={signOff} /> }]),
         { label: 'Revision', value: page.revision === 0 ? 'none yet' : String(page.revision), isFigure: true },
         { label: 'Doubts', value: <DoubtState doubts={doubts} />, stays: true },
         { label: 'Proof', value: <ProofState store={store} /> },
@@ -69,6 +73,11 @@ export function PageTitle({ page, doubts, addressOf, children }: Props) {
       ]}
     />
   );
+}
+
+function Signature({ signOff: { signedBy, signedAt, doubtCount } }: { signOff: NonNullable<Page['signOff']> }) {
+  const doubts = doubtCount === 0 ? '' : `, with ${counted(doubtCount, 'doubt')}`;
+  return `${signedBy}, ${writtenDay(signedAt)}${doubts}`;
 }
 
 function ProofState({ store }: { store: LiveStore | null }) {

@@ -13,6 +13,7 @@ import {
   searchQuantities,
   sharedEdits,
   sharedTexts,
+  signOffs,
 } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
@@ -107,6 +108,7 @@ function removePage(tx: Connection, { id }: PageRow, heirId: string): void {
   tx.delete(lessons).where(eq(lessons.pageId, id)).run();
   tx.delete(sharedEdits).where(eq(sharedEdits.pageId, id)).run();
   tx.delete(sharedTexts).where(eq(sharedTexts.pageId, id)).run();
+  tx.delete(signOffs).where(eq(signOffs.pageId, id)).run();
   tx.delete(revisions).where(eq(revisions.pageId, id)).run();
   tx.delete(readings).where(eq(readings.pageId, id)).run();
   tx.delete(pages).where(eq(pages.id, id)).run();

@@ -8,6 +8,7 @@ import { useCan } from '#src/api/session.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
 import { HistoryButton } from '#src/features/history/history-button.tsx';
 import { ReadPage } from '#src/features/reader/read-page.tsx';
+import { ReviewDeeds } from '#src/features/review/review-deeds.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
 import { useTitle } from '#src/lib/use-title.ts';
 import { PageTitle } from '#src/scan/page-title.tsx';
@@ -46,6 +47,7 @@ function Reading({ page }: { page: Page }) {
               <Link to={`/pages/${page.id}`}>Correct this page</Link>
             </Button>
           ) : null}
+          {mayEdit ? <ReviewDeeds page={page} /> : null}
           <HistoryButton pageId={page.id} label={page.label} mayRestore={false} />
           <Button onClick={() => window.print()}>Print</Button>
         </PageTitle>
