@@ -19,7 +19,7 @@ import { record } from '#server/features/accounts/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { SignedIn } from '#server/http/session.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { type PageRow, changePage, dropJobs, insertPages, pageSummary } from './queries.ts';
+import { type PageRow, changePage, dropJobs, editionsHolding, insertPages, pageSummary } from './queries.ts';
 import { existingPage, placeToDraw } from './service.ts';
 
 type Who = Pick<SignedIn, 'id' | 'name'>;
@@ -78,6 +78,12 @@ function refuseWorkedOn(db: Connection, { id, state, label }: PageRow): void {
     throw new AppError(
       'cannot-do',
       `Somebody has worked on page ${label}. Restore its first revision by hand if that is to go.`,
+    );
+  const [edition] = editionsHolding(db, id);
+  if (edition !== undefined)
+    throw new AppError(
+      'cannot-do',
+      `Page ${label} is in edition ${edition} of this manual, which is published: it has to stay as it is.`,
     );
 }
 

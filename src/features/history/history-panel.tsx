@@ -3,6 +3,7 @@ import { useState } from 'react';
 import type { RevisionSummary } from '#shared/api/revisions.ts';
 import { restoreRevision, revisionsOfPage } from '#src/api/revisions.ts';
 import { counted } from '#shared/kit/counted.ts';
+import { Comparison } from '#src/blocks/compare/comparison.tsx';
 import { saidBy } from '#src/lib/said-by.ts';
 import { writtenTime } from '#src/lib/written.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -12,7 +13,6 @@ import { Notice } from '#src/ui/notice.tsx';
 import { Pending } from '#src/ui/pending.tsx';
 import { RuledTable, Td, Th } from '#src/ui/ruled-table.tsx';
 import { toast } from '#src/ui/toast.ts';
-import { Comparison } from './comparison.tsx';
 
 type Props = {
   pageId: string;

@@ -2,6 +2,7 @@ import { useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
+import type { ChangeBars } from '#src/blocks/compare/change-bars.ts';
 import { zoneKey } from '#src/blocks/look.ts';
 import { PageView } from '#src/blocks/page-view.tsx';
 import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
@@ -12,10 +13,15 @@ import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 
-type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: readonly Zone[]; query: string };
+type Props = {
+  page: Page;
+  /** Hits of a search, outlined on the scan. */ hits: readonly Zone[];
+  query: string;
+  bars?: ChangeBars | null;
+};
 
 /** A page that is read: its text beside its scan, each showing where the other stands. */
-export function ReadPage({ page, hits, query }: Props) {
+export function ReadPage({ page, hits, query, bars = null }: Props) {
   useAttention(page);
   const version = page.imageVersion ?? '';
   const document = page.document as DocNode | null;
@@ -73,7 +79,7 @@ export function ReadPage({ page, hits, query }: Props) {
             {document === null ? (
               <PageWaiting page={page} />
             ) : (
-              <PageView document={document} context={context} query={query} />
+              <PageView document={document} context={context} query={query} bars={bars} />
             )}
           </div>
         </div>

@@ -1,9 +1,9 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { oneRevision } from '#src/api/revisions.ts';
-import { canonical } from '#src/blocks/compare/canonical.ts';
-import { compareDocuments } from '#src/blocks/compare/compare-blocks.ts';
-import { ComparedText, wordForKind } from '#src/blocks/compare/compared-text.tsx';
+import { canonical } from './canonical.ts';
+import { compareDocuments } from './compare-blocks.ts';
+import { ComparedText, wordForKind } from './compared-text.tsx';
 import { Failure } from '#src/ui/failure.tsx';
 import { Pending } from '#src/ui/pending.tsx';
 
