@@ -88,3 +88,30 @@ export const takeBackSignature = defineEndpoint({
   params: pageParams,
   reply: page,
 });
+
+const cellPlace = z.tuple([z.number().int().nonnegative(), z.number().int().nonnegative()]);
+
+export const restorePart = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/revisions/:number/restore-part',
+  summary: 'Bring one block, or one cell of a table, of an older revision back; 409 if the page was saved meanwhile',
+  action: 'edit-pages',
+  params: oneParams,
+  body: z.object({
+    baseRevision: z.number().int().positive(),
+    block: id,
+    cell: z.object({ from: cellPlace, to: cellPlace }).optional(),
+  }),
+  reply: revision,
+});
+
+export const listBlockAuthors = defineEndpoint({
+  method: 'get',
+  path: '/api/pages/:pageId/authors',
+  summary: 'Who wrote each block of a page: the last revision in which its text changed',
+  action: 'read-manuals',
+  params: pageParams,
+  reply: z.object({
+    items: z.array(z.object({ block: z.string(), kind: z.string(), words: z.string(), revision: revisionSummary })),
+  }),
+});

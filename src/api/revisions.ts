@@ -4,6 +4,9 @@ import { call } from './call.ts';
 import { everyItem } from './every-item.ts';
 import { pageKeys } from './page-keys.ts';
 
+type Place = [row: number, cell: number];
+type Given = { number: number; baseRevision: number; block: string; cell?: { from: Place; to: Place } };
+
 export const revisionsOfPage = (pageId: string) =>
   queryOptions({
     queryKey: pageKeys.revisions(pageId),
@@ -44,4 +47,16 @@ export const takeBackSignature = (client: QueryClient, pageId: string) =>
     mutationFn: () => call(api.takeBackSignature, { params: { pageId } }),
     onSuccess: (page) => client.setQueryData(pageKeys.one(pageId), page),
     onError: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });
+
+export const restorePart = (client: QueryClient, pageId: string) =>
+  mutationOptions({
+    mutationFn: ({ number, ...body }: Given) => call(api.restorePart, { params: { pageId, number }, body }),
+    onSettled: () => client.invalidateQueries({ queryKey: pageKeys.one(pageId) }),
+  });
+
+export const authorsOfPage = (pageId: string) =>
+  queryOptions({
+    queryKey: pageKeys.authors(pageId),
+    queryFn: ({ signal }) => call(api.listBlockAuthors, { params: { pageId }, signal }).then(({ items }) => items),
   });

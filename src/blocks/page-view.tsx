@@ -1,10 +1,10 @@
 import { Fragment, type ReactNode, memo } from 'react';
+import { keyOfBlock } from '#shared/document/block-key.ts';
 import type { DocNode, Mark, Zone } from '#shared/document/define-block.ts';
 import type { MarkKind } from '#shared/document/marks.ts';
 import { type BlockKind, blockOf } from '#shared/document/registry.ts';
 import type { TableColumn } from '#shared/document/blocks/table.ts';
 import type { ChangeBars } from './compare/change-bars.ts';
-import { keyOfBlock } from './compare/compare-blocks.ts';
 import { drawLook } from './draw-look.tsx';
 import { LiveValueView } from './live-value/live-value-view.tsx';
 import type { LookContext, Spec } from './look.ts';

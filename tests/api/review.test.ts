@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { doc, doubtful, paragraph, text } from '#shared/document/documents.fixture.ts';
+import { block, doc, doubtful, paragraph, text } from '#shared/document/documents.fixture.ts';
 import { drawSheet, sheet } from '../helpers/scans.ts';
 import { type Caller, type TestServer, eventually, startTestServer } from '../helpers/server.ts';
 import { Writer } from '../helpers/writer.ts';
@@ -104,5 +104,49 @@ describe('signing a page off', () => {
     const reply = await second.post(at('/proofed'), { revision: 1 });
     expect(reply.status).toBe(422);
     expect(reply.body.detail).toContain('not read yet');
+  });
+});
+
+describe('parts of older revisions', () => {
+  const blocks = (...words: string[]) =>
+    doc(...words.map((each, index) => block('paragraph', { id: `p${index}` }, text(each))));
+  const save = (who: Caller, baseRevision: number, ...words: string[]) =>
+    who.put(at('/document'), { baseRevision, document: blocks(...words) });
+
+  it('are brought back into the text that people share, and the rest stays', async () => {
+    await save(editor, 0, 'Tune L5', 'Lock it');
+    await save(editor, 1, 'Tune L6', 'Lock it well');
+    const hand = new Writer(second, pageId);
+    try {
+      await eventually(
+        () => Promise.resolve(hand.words),
+        (words) => words.includes('L6'),
+        10_000,
+      );
+      const reply = await editor.post(at('/revisions/1/restore-part'), { baseRevision: 2, block: 'p0' });
+      expect(reply.body).toMatchObject({ number: 3, note: 'One block as in revision 1' });
+      expect((await editor.get(at('/text'))).text).toBe('Tune L5\nLock it well');
+      await eventually(
+        () => Promise.resolve(hand.words),
+        (words) => words.includes('Tune L5') && words.includes('Lock it well'),
+        10_000,
+      );
+    } finally {
+      hand.close();
+    }
+    const late = await editor.post(at('/revisions/1/restore-part'), { baseRevision: 2, block: 'p1' });
+    expect(late.status).toBe(409);
+    const none = await editor.post(at('/revisions/1/restore-part'), { baseRevision: 3, block: 'x' });
+    expect(none.status).toBe(422);
+  });
+
+  it('each have the one who wrote them', async () => {
+    await save(editor, 0, 'Tune L5', 'Lock it');
+    await save(second, 1, 'Tune L5', 'Lock it well');
+    const { items } = (await editor.get(at('/authors'))).body;
+    expect(items.map((each: any) => [each.block, each.revision.author])).toEqual([
+      ['p0', 'Test editor'],
+      ['p1', 'Test archivist'],
+    ]);
   });
 });

@@ -12,6 +12,7 @@ import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { documentOfPage, documentsOfManual, findRevision, revisionRows } from './queries.ts';
+import { authorsOfBlocks, restoreOnePart } from './parts.ts';
 import { pageReply, signPage, takeBackSignature } from './review.ts';
 import { restoreRevision, revisionReply, saveDocument, saveTogether } from './service.ts';
 
@@ -38,6 +39,10 @@ export function revisionRoutes(api: ApiRouter, tools: Tools): void {
   );
   serve(api, revisionApi.signPage, ({ user, params, body }) => signPage(tools, user, { ...params, ...body }));
   serve(api, revisionApi.takeBackSignature, ({ user, params }) => takeBackSignature(tools, user, params.pageId));
+  serve(api, revisionApi.restorePart, ({ user, params, body }) =>
+    revisionReply(restoreOnePart(tools, user, { ...params, ...body })),
+  );
+  serve(api, revisionApi.listBlockAuthors, ({ params }) => ({ items: authorsOfBlocks(db, params.pageId) }));
   documentRoutes(api, tools);
   partRoutes(api, tools);
 }

@@ -99,9 +99,11 @@ function PagesPart({ pages: { added, removed, changed, same } }: { pages: Editio
       {removed.map(({ pageId, label }) => (
         <Line key={pageId}>{`Page ${label}: removed`}</Line>
       ))}
-      <Line>
-        <span className="text-pencil">{`${counted(same, 'page')} unchanged`}</span>
-      </Line>
+      {same === 0 ? null : (
+        <Line>
+          <span className="text-pencil">{`${counted(same, 'page')} unchanged`}</span>
+        </Line>
+      )}
     </Part>
   );
 }

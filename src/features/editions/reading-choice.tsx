@@ -36,7 +36,7 @@ export function ReadingChoice({ manualId, shown, isMissing, bars }: Props) {
         ) : null}
         {before === null ? null : (
           <>
-            <Button aria-pressed={bars.areOn} onClick={() => bars.turn(!bars.areOn)}>
+            <Button onClick={() => bars.turn(!bars.areOn)}>
               {bars.areOn ? 'Hide change bars' : 'Show change bars'}
             </Button>
             <span role="status" className="text-pencil">
