@@ -19,6 +19,15 @@ const write = (baseRevision: number, ...words: string[]) =>
 const windowOf = async (role: Role): Promise<Page> =>
   (await signedIn(browser, server.url, { email: addressOf(role), password })).page;
 const cell = (page: Page, label: string) => page.locator(`dt:text-is("${label}") + dd`);
+/** A picture of the screen as a phone shows it in the dark. */
+async function keepDarkPhone(page: Page, name: string): Promise<void> {
+  if (process.env['SCREENSHOTS'] === undefined) return;
+  await page.setViewportSize({ width: 390, height: 844 });
+  await page.emulateMedia({ colorScheme: 'dark' });
+  await keepPicture(page, `${name}-dark-phone`);
+  await page.setViewportSize({ width: 1440, height: 900 });
+  await page.emulateMedia({ colorScheme: 'light' });
+}
 const pageText = (page: Page) => page.getByLabel('Page text').first();
 
 beforeAll(async () => {
@@ -76,6 +85,7 @@ describe('an edition', () => {
     );
     expect(await seriousFindings(first)).toEqual([]);
     await keepPicture(first, 'change-bars');
+    await keepDarkPhone(first, 'change-bars');
     await first.getByRole('radio', { name: 'The edition' }).click();
     await pageText(first).getByText('Tune the core of L5.').waitFor();
 
@@ -89,6 +99,7 @@ describe('an edition', () => {
     await second.getByRole('article', { name: 'Edition 2' }).waitFor();
     expect(await seriousFindings(second)).toEqual([]);
     await keepPicture(second, 'editions');
+    await keepDarkPhone(second, 'editions');
     await pageText(reader).getByText('Tune the core of L6.').waitFor();
     expect(await cell(reader, 'Edition').textContent()).toContain('2, ');
 
@@ -101,5 +112,30 @@ describe('an edition', () => {
     await second.getByText('by Test archivist: The core is L5 after all').waitFor();
     await pageText(reader).getByText('Tune the core of L5.').waitFor();
     expect(await seriousFindings(reader)).toEqual([]);
+  });
+});
+
+describe('the history of a page', () => {
+  it('compares cell by cell, says who wrote what, and brings one cell back', async () => {
+    const { body: now } = await editor.get(`/api/pages/${pageId}`);
+    const document = JSON.parse(JSON.stringify(now.document).replace('22-1470', '22-1740')) as object;
+    await editor.put(`/api/pages/${pageId}/document`, { baseRevision: now.revision, document });
+    const page = await windowOf('archivist');
+    await page.goto(`${server.url}/pages/${pageId}`);
+    await page.locator('.page-text').getByText('22-1740').waitFor();
+    await page.getByRole('button', { name: 'History' }).click();
+    await page.locator('.compared ins', { hasText: '1740' }).waitFor();
+    await page.getByRole('button', { name: 'Who wrote what' }).click();
+    await page.getByRole('table', { name: 'Who wrote each block' }).getByText('Tune the core of L6.').waitFor();
+    expect(await seriousFindings(page)).toEqual([]);
+    await page.getByRole('radio', { name: 'Side by side' }).click();
+    await page.locator('.compared-sides').waitFor();
+    expect(await seriousFindings(page)).toEqual([]);
+    await keepPicture(page, 'history');
+    await keepDarkPhone(page, 'history');
+    await page.getByRole('button', { name: 'Restore this cell to “22-1470”' }).press('Enter');
+    await page.getByText('Restored: one cell as in revision 2.').waitFor();
+    await page.keyboard.press('Escape');
+    await page.locator('.page-text').getByText('22-1470').waitFor();
   });
 });

@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { Link, useParams } from 'react-router';
 import type { Edition } from '#shared/api/editions.ts';
 import type { Manual } from '#shared/api/manuals.ts';
+import { counted } from '#shared/kit/counted.ts';
 import { editionsOfManual } from '#src/api/editions.ts';
 import { oneManual } from '#src/api/manuals.ts';
 import { useCan } from '#src/api/session.ts';
@@ -59,7 +60,7 @@ function Editions({ manual, editions }: { manual: Manual; editions: Edition[] })
         under={[manual.maker, manual.documentNumber].filter(Boolean).join(', ') || undefined}
         cells={[
           { label: 'Edition', value: latest === undefined ? 'none published' : editionCell(latest), stays: true },
-          { label: 'Proofed', value: `${proofed} of ${all} pages`, stays: true },
+          { label: 'Proofed', value: `${proofed} of ${counted(all, 'page')}`, stays: true },
           { label: 'Doubts', value: String(manual.doubtCount), isFigure: true },
         ]}
       />
