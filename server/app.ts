@@ -8,6 +8,7 @@ import { getHealth } from '#shared/api/health.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { type Auth, accountRoutes, hasDemoPeople, sessionFinder } from '#server/features/accounts/index.ts';
 import { type Presence, coeditingRoutes } from '#server/features/coediting/index.ts';
+import { editionRoutes } from '#server/features/editions/index.ts';
 import { type AddPages, manualRoutes } from '#server/features/manuals/index.ts';
 import { pageRoutes } from '#server/features/pages/index.ts';
 import { recognitionRoutes } from '#server/features/recognition/index.ts';
@@ -69,6 +70,7 @@ function apiRoutes(tools: AppTools): ApiRouter {
   revisionRoutes(api, tools);
   coeditingRoutes(api, tools);
   valueRoutes(api, tools);
+  editionRoutes(api, tools);
   searchRoutes(api, tools);
   liveRoute(api, tools);
   api.router.get('/api/openapi.json', (_request, response) => {

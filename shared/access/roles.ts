@@ -13,6 +13,7 @@ export const lowestRole = {
   'save-settings': 'technician',
   'edit-pages': 'editor',
   'edit-quantities': 'editor',
+  'publish-editions': 'editor',
   'add-manuals': 'archivist',
   'upload-sources': 'archivist',
   'run-recognition': 'archivist',

@@ -32,12 +32,24 @@ export type PageSummary = z.infer<typeof pageSummary>;
 
 export const documentJson = z.record(z.string(), z.unknown());
 
+/** An editor who did not write the text read it through and found it right. */
+export const signOff = z.object({
+  signedBy: z.string(),
+  signedAt: time,
+  /** Doubts that were left when it was signed. */
+  doubtCount: z.number().int(),
+});
+
 export const page = pageSummary.extend({
   manualId: id,
   width: z.number().int().nullable(),
   height: z.number().int().nullable(),
   document: documentJson.nullable(),
   zones: z.array(z.object({ block: z.string(), kind: z.string(), box: zone })),
+  /** Of the newest revision; null unless the page is proofed. */
+  signOff: signOff.nullable(),
+  /** The ids of the people who wrote the newest text, and so cannot sign it off. */
+  authorIds: z.array(id),
 });
 export type Page = z.infer<typeof page>;
 

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { id, listOf, listQuery, pageParams, time } from './common.ts';
 import { defineEndpoint } from './endpoint.ts';
-import { documentJson } from './pages.ts';
+import { documentJson, page } from './pages.ts';
 
 export const revisionOrigins = ['machine', 'person'] as const;
 
@@ -67,4 +67,51 @@ export const restoreRevision = defineEndpoint({
   params: oneParams,
   body: z.object({ note }).optional(),
   reply: revision,
+});
+
+export const signPage = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/proofed',
+  summary:
+    'Sign a page off as proofed; its newest text must be by others. Doubts that are left must be named by their count',
+  action: 'edit-pages',
+  params: pageParams,
+  body: z.object({ revision: z.number().int().positive(), doubts: z.number().int().nonnegative().default(0) }),
+  reply: page,
+});
+
+export const takeBackSignature = defineEndpoint({
+  method: 'delete',
+  path: '/api/pages/:pageId/proofed',
+  summary: 'Take back that a page is proofed',
+  action: 'edit-pages',
+  params: pageParams,
+  reply: page,
+});
+
+const cellPlace = z.tuple([z.number().int().nonnegative(), z.number().int().nonnegative()]);
+
+export const restorePart = defineEndpoint({
+  method: 'post',
+  path: '/api/pages/:pageId/revisions/:number/restore-part',
+  summary: 'Bring one block, or one cell of a table, of an older revision back; 409 if the page was saved meanwhile',
+  action: 'edit-pages',
+  params: oneParams,
+  body: z.object({
+    baseRevision: z.number().int().positive(),
+    block: id,
+    cell: z.object({ from: cellPlace, to: cellPlace }).optional(),
+  }),
+  reply: revision,
+});
+
+export const listBlockAuthors = defineEndpoint({
+  method: 'get',
+  path: '/api/pages/:pageId/authors',
+  summary: 'Who wrote each block of a page: the last revision in which its text changed',
+  action: 'read-manuals',
+  params: pageParams,
+  reply: z.object({
+    items: z.array(z.object({ block: z.string(), kind: z.string(), words: z.string(), revision: revisionSummary })),
+  }),
 });

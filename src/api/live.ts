@@ -2,6 +2,7 @@ import type { QueryClient } from '@tanstack/react-query';
 import { type LiveEvent, liveEvent } from '#shared/api/events.ts';
 import type { PageSummary } from '#shared/api/pages.ts';
 import type { PagePresence } from '#shared/api/presence.ts';
+import { editionKeys } from './edition-keys.ts';
 import { manualKeys } from './manuals.ts';
 import { pageKeys } from './page-keys.ts';
 import { partKeys } from './part-keys.ts';
@@ -75,7 +76,11 @@ export function applyEvent(client: QueryClient, event: LiveEvent, countsChanged:
       return;
     case 'quantities':
       void client.invalidateQueries({ queryKey: quantityKeys.ofManual(event.manualId) });
+      void client.invalidateQueries({ queryKey: editionKeys.againstWork(event.manualId) });
       countsChanged(event.manualId);
+      return;
+    case 'editions':
+      void client.invalidateQueries({ queryKey: editionKeys.ofManual(event.manualId) });
       return;
     case 'presence':
       client.setQueryData(presenceKey(event.manualId), (known: PagePresence[] | undefined) =>
@@ -97,7 +102,11 @@ function pageChanged(client: QueryClient, manualId: string, summary: PageSummary
   if (before?.revision !== summary.revision || before.state !== summary.state) {
     void client.invalidateQueries({ queryKey: pageKeys.one(summary.id) });
     void client.invalidateQueries({ queryKey: partKeys.ofManual(manualId) });
+    void client.invalidateQueries({ queryKey: editionKeys.againstWork(manualId) });
   }
+  // The words of an edition stay, but their places follow the picture.
+  if (before !== undefined && before.imageVersion !== summary.imageVersion)
+    void client.invalidateQueries({ queryKey: editionKeys.ofManual(manualId) });
 }
 
 function throttledCounts(client: QueryClient): Counts {

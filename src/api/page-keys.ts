@@ -6,6 +6,7 @@ export const pageKeys = {
   reading: (pageId: string) => ['pages', 'one', pageId, 'reading'] as const,
   text: (pageId: string) => ['pages', 'one', pageId, 'text'] as const,
   tables: (pageId: string) => ['pages', 'one', pageId, 'tables'] as const,
+  authors: (pageId: string) => ['pages', 'one', pageId, 'authors'] as const,
   revisions: (pageId: string) => ['pages', 'one', pageId, 'revisions'] as const,
   revision: (pageId: string, number: number) => ['pages', 'one', pageId, 'revisions', number] as const,
 };

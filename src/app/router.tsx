@@ -29,6 +29,7 @@ export const router = createBrowserRouter([
           { index: true, ...fetched(() => import('./routes/library.tsx')) },
           { path: '/manuals/:manualId', ...fetched(() => import('./routes/manual.tsx')) },
           { path: '/manuals/:manualId/calculations', ...fetched(() => import('./routes/calculations.tsx')) },
+          { path: '/manuals/:manualId/editions', ...fetched(() => import('./routes/editions.tsx')) },
           { path: '/pages/:pageId', ...fetched(() => import('./routes/page-workspace.tsx')) },
           { path: '/pages/:pageId/read', ...fetched(() => import('./routes/reading-view.tsx')) },
           { path: '/search', ...fetched(() => import('./routes/search.tsx')) },

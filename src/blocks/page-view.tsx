@@ -1,10 +1,12 @@
 import { Fragment, type ReactNode, memo } from 'react';
 import { Link } from 'react-router';
 import { type Leading, type Resolve, leadingStretches } from '#shared/document/cross-references.ts';
+import { keyOfBlock } from '#shared/document/block-key.ts';
 import type { DocNode, Mark, Zone } from '#shared/document/define-block.ts';
 import type { MarkKind } from '#shared/document/marks.ts';
 import { type BlockKind, blockOf } from '#shared/document/registry.ts';
 import type { TableColumn } from '#shared/document/blocks/table.ts';
+import type { ChangeBars } from './compare/change-bars.ts';
 import { drawLook } from './draw-look.tsx';
 import { LiveValueView } from './live-value/live-value-view.tsx';
 import type { LookContext, Spec } from './look.ts';
@@ -20,13 +22,15 @@ type Props = {
   query?: string;
   /** What the texts of the manual can point at; null until it is known. */
   resolve?: Resolve | null;
+  /** Bars in the margin beside what changed since an earlier state. */
+  bars?: ChangeBars | null;
 };
 
 /** A page document as it is read: no editor, every live value alive. */
-export const PageView = memo(function PageView({ document, context, query = '', resolve = null }: Props) {
+export const PageView = memo(function PageView({ document, context, query = '', resolve = null, bars = null }: Props) {
   const marked = stretchesOf(document, query);
   const leading = resolve === null ? nothingLeads : leadingStretches(document, resolve);
-  return <>{drawNode({ node: document, context, marked, leading, columns: [] })}</>;
+  return <>{drawNode({ node: document, context, marked, leading, columns: [], bars })}</>;
 });
 const nothingLeads: ReadonlyMap<DocNode, Leading[]> = new Map();
 
@@ -37,6 +41,7 @@ type Drawing = {
   leading: ReadonlyMap<DocNode, Leading[]>;
   columns: readonly TableColumn[];
   at?: number;
+  bars?: ChangeBars | null;
 };
 
 function drawNode(drawing: Drawing): ReactNode {
@@ -48,15 +53,48 @@ function drawNode(drawing: Drawing): ReactNode {
   if (definition === undefined) return null;
   const attributes = { ...definition.attributes.safeParse(node.attrs ?? {}).data, ...node.attrs };
   const columns = node.type === 'table' ? (attributes['columns'] as TableColumn[]) : drawing.columns;
-  const children = (node.content ?? []).map((child, index) =>
-    drawNode({ ...drawing, node: child, columns, at: index }),
-  );
+  const children = drawChildren({ ...drawing, columns });
   const look = blockLooks[node.type as BlockKind](attributes, context);
   if (node.type === 'table') return drawLook(scrolling(look), children, key);
   if (node.type !== 'tableHeader') return drawLook(look, children.length === 0 ? null : children, key);
   const meaning = columns[key]?.meaning;
   return drawLook({ ...look, attributes: { ...look.attributes, ...meaningAttribute(meaning) } }, children, key);
 }
+
+function drawChildren(drawing: Drawing): ReactNode[] {
+  const { node, bars = null } = drawing;
+  return (node.content ?? []).map((child, at) => {
+    const drawn = drawNode({ ...drawing, node: child, at });
+    return bars === null || node.type !== 'doc' ? drawn : withBar(drawn, { bars, key: keyOfBlock(child, at), at });
+  });
+}
+
+const barWords = { changed: 'Changed since', new: 'New since' } as const;
+
+/** The block with its bar; each bar also says in words what it means, for those who do not see it. */
+function withBar(drawn: ReactNode, { bars, key, at }: { bars: ChangeBars; key: string; at: number }): ReactNode {
+  const change = bars.blocks.get(key);
+  return (
+    <Fragment key={at}>
+      {at === 0 && bars.goneBehind.has('') ? <TakenOut since={bars.since} /> : null}
+      {change === undefined ? (
+        drawn
+      ) : (
+        <div className="change-bar">
+          <span className="sr-only">{`${barWords[change]} ${bars.since}: `}</span>
+          {drawn}
+        </div>
+      )}
+      {bars.goneBehind.has(key) ? <TakenOut since={bars.since} /> : null}
+    </Fragment>
+  );
+}
+
+const TakenOut = ({ since }: { since: string }) => (
+  <div className="change-bar change-gone">
+    <span className="sr-only">{`Something was taken out here since ${since}.`}</span>
+  </div>
+);
 
 /** A table wider than its leaf scrolls by itself, so the keys must reach it. In the editor the caret does. */
 const scrolling = (look: Spec): Spec => ({

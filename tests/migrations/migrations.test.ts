@@ -26,6 +26,7 @@ function oldDatabase(migrations: number): string {
     insert into sources (id, manual_id, file_name, sha256, bytes, media_type, state, created_at, created_by) values ('s', 'm', 'f', 'x', 1, 'image/png', 'ready', 1, 'a');
     insert into pages (id, manual_id, source_id, source_page, position, label, state) values ('p', 'm', 's', 0, 1, '1', 'read');
     insert into revisions (page_id, number, origin, author, note, doubt_count, document, saved_at) values ('p', 1, 'machine', 'r', '', 0, '{"type":"doc"}', 1);
+    insert into revisions (page_id, number, origin, author, author_id, note, doubt_count, document, saved_at) values ('p', 2, 'person', 'Ed', 'u1', '', 0, '{"type":"doc"}', 1);
   `);
   raw.close();
   return folder;
@@ -36,7 +37,7 @@ describe('a database of an older version', () => {
     const { raw, close } = openDatabase(oldDatabase(1));
     const count = (table: string): number =>
       (raw.prepare(`select count(*) as n from ${table}`).get() as { n: number }).n;
-    expect(['manuals', 'sources', 'pages', 'revisions'].map(count)).toEqual([1, 1, 1, 1]);
+    expect(['manuals', 'sources', 'pages', 'revisions'].map(count)).toEqual([1, 1, 1, 2]);
     expect(raw.pragma('foreign_keys', { simple: true })).toBe(1);
     raw.exec(
       `insert into search_entries (kind, page_id, manual_id, body, placed) values ('text', 'p', 'm', 'oscillator', '[]')`,
@@ -48,6 +49,15 @@ describe('a database of an older version', () => {
     expect(raw.prepare(`select count(*) as n from search_words where search_words match 'oscillator'`).get()).toEqual({
       n: 0,
     });
+    close();
+  });
+
+  it('keeps the name of who wrote a revision as the one of its authors', () => {
+    const { raw, close } = openDatabase(oldDatabase(1));
+    expect(raw.prepare('select author_ids as ids from revisions order by number').all()).toEqual([
+      { ids: '[]' },
+      { ids: '["u1"]' },
+    ]);
     close();
   });
 

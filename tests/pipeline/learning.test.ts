@@ -88,3 +88,23 @@ describe('a double-page spread', () => {
     expect(reply).toMatchObject({ status: 422, body: { detail: expect.stringContaining('worked on page 1') } });
   });
 });
+
+describe('a page that only the machine has read, in an edition', () => {
+  it('gets a revision of its own when the manual teaches something; the edition stays as it was', async () => {
+    const [, second] = await archivist.pagesOf(manualId);
+    const edition = `/api/manuals/${manualId}/editions`;
+    expect((await editor.post(edition, { number: 1 })).status).toBe(201);
+    const before = (await editor.get(`${edition}/1/pages/${second.id}`)).body.document;
+    await archivist.patch(`/api/manuals/${manualId}`, { learns: true });
+    await eventually(
+      () => doubtsOf(second.id),
+      (found) => found.length === 1,
+      20_000,
+    );
+    const { body } = await editor.get(`/api/pages/${second.id}`);
+    expect(body).toMatchObject({ revision: 2, state: 'read' });
+    expect((await editor.get(`${edition}/1/pages/${second.id}`)).body).toMatchObject({ revision: 1, document: before });
+    const { body: refused } = await archivist.post(`/api/pages/${second.id}/division`);
+    expect(refused.detail).toContain('is in edition 1 of this manual');
+  });
+});

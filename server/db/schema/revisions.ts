@@ -14,7 +14,10 @@ export const revisions = sqliteTable(
     number: integer().notNull(),
     origin: text().$type<(typeof revisionOrigins)[number]>().notNull(),
     author: text().notNull(),
+    /** Who wrote last, of those that `author` names. */
     authorId: text('author_id'),
+    /** All that `author` names; none where the machine made it. */
+    authorIds: text('author_ids', { mode: 'json' }).$type<string[]>().notNull().default([]),
     readingId: integer('reading_id'),
     note: text().notNull(),
     doubtCount: integer('doubt_count').notNull(),
@@ -22,6 +25,26 @@ export const revisions = sqliteTable(
     savedAt: integer('saved_at', { mode: 'timestamp_ms' }).notNull(),
   },
   (table) => [uniqueIndex('one_revision_of_a_number').on(table.pageId, table.number)],
+);
+
+/** Who read a revision of a page through and found it right. Kept for good: one that was taken back says who did so. */
+export const signOffs = sqliteTable(
+  'sign_offs',
+  {
+    id: integer().primaryKey({ autoIncrement: true }),
+    pageId: text('page_id')
+      .notNull()
+      .references(() => pages.id),
+    revision: integer().notNull(),
+    signedBy: text('signed_by').notNull(),
+    signedById: text('signed_by_id').notNull(),
+    signedAt: integer('signed_at', { mode: 'timestamp_ms' }).notNull(),
+    /** Doubts that were left, and known to who signed. */
+    doubtCount: integer('doubt_count').notNull(),
+    takenBackBy: text('taken_back_by'),
+    takenBackAt: integer('taken_back_at', { mode: 'timestamp_ms' }),
+  },
+  (table) => [index('sign_offs_of_a_page').on(table.pageId, table.revision)],
 );
 
 /** What each corrected page teaches about its manual; follows from its document and its reading. */

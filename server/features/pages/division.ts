@@ -13,12 +13,13 @@ import {
   searchQuantities,
   sharedEdits,
   sharedTexts,
+  signOffs,
 } from '#server/db/schema/index.ts';
 import { record } from '#server/features/accounts/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { SignedIn } from '#server/http/session.ts';
 import type { Tools } from '#server/http/tools.ts';
-import { type PageRow, changePage, dropJobs, insertPages, pageSummary } from './queries.ts';
+import { type PageRow, changePage, dropJobs, editionsHolding, insertPages, pageSummary } from './queries.ts';
 import { existingPage, placeToDraw } from './service.ts';
 
 type Who = Pick<SignedIn, 'id' | 'name'>;
@@ -78,6 +79,12 @@ function refuseWorkedOn(db: Connection, { id, state, label }: PageRow): void {
       'cannot-do',
       `Somebody has worked on page ${label}. Restore its first revision by hand if that is to go.`,
     );
+  const [edition] = editionsHolding(db, id);
+  if (edition !== undefined)
+    throw new AppError(
+      'cannot-do',
+      `Page ${label} is in edition ${edition} of this manual, which is published: it has to stay as it is.`,
+    );
 }
 
 function tell({ wake, live }: Tools, manualId: string): void {
@@ -107,6 +114,7 @@ function removePage(tx: Connection, { id }: PageRow, heirId: string): void {
   tx.delete(lessons).where(eq(lessons.pageId, id)).run();
   tx.delete(sharedEdits).where(eq(sharedEdits.pageId, id)).run();
   tx.delete(sharedTexts).where(eq(sharedTexts.pageId, id)).run();
+  tx.delete(signOffs).where(eq(signOffs.pageId, id)).run();
   tx.delete(revisions).where(eq(revisions.pageId, id)).run();
   tx.delete(readings).where(eq(readings.pageId, id)).run();
   tx.delete(pages).where(eq(pages.id, id)).run();

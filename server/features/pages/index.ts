@@ -1,4 +1,4 @@
-export { type PageRow, changePage, findPage, newestReading, pageSummary } from './queries.ts';
+export { type PageRow, changePage, editionsHolding, findPage, newestReading, pageSummary } from './queries.ts';
 export { pageRoutes } from './routes.ts';
 export { addPagesBy, existingPage, restingState, tellPage } from './service.ts';
 export { drawStep, failPage, incomingFile } from './steps.ts';

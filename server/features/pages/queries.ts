@@ -1,6 +1,6 @@
 import { and, asc, eq, inArray, sql } from 'drizzle-orm';
 import type { PageState, PageSummary } from '#shared/api/pages.ts';
-import { jobs, pages, readings } from '#server/db/schema/index.ts';
+import { editionPages, editions, jobs, pages, readings } from '#server/db/schema/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 
 export type PageRow = typeof pages.$inferSelect;
@@ -76,3 +76,16 @@ export const dropJobs = (db: Connection, pageIds: string[]): void => {
     .where(and(inArray(jobs.subjectId, pageIds), inArray(jobs.step, ['draw-page', 'read-page'])))
     .run();
 };
+
+/** The numbers of the editions that hold a page, or one revision of it, oldest first. */
+export const editionsHolding = (db: Connection, pageId: string, revision?: number): number[] =>
+  db
+    .select({ number: editions.number })
+    .from(editionPages)
+    .innerJoin(editions, eq(editions.id, editionPages.editionId))
+    .where(
+      and(eq(editionPages.pageId, pageId), revision === undefined ? undefined : eq(editionPages.revision, revision)),
+    )
+    .orderBy(asc(editions.number))
+    .all()
+    .map(({ number }) => number);

@@ -1,6 +1,7 @@
 export { learnStep, teachStep } from './learning.ts';
-export { documentOfPage, documentsOfManual } from './queries.ts';
+export { documentOfPage, documentsOfManual, findRevision } from './queries.ts';
+export { signOffOf } from './review.ts';
 export { revisionRoutes } from './routes.ts';
-export { saveTogether } from './service.ts';
-export { keepEdit, pagesWithPendingEdits, sharedStateOf } from './shared-text.ts';
+export { onCurrentPicture, saveTogether } from './service.ts';
+export { hasPendingEdits, keepEdit, pagesWithPendingEdits, sharedStateOf } from './shared-text.ts';
 export { structureStep } from './steps.ts';

@@ -6,11 +6,12 @@ import type { Reading } from '#shared/reading/reading.ts';
 import { documentOf } from '#shared/reading/structure.ts';
 import { taught } from '#shared/reading/teach.ts';
 import { lessons, manuals, pages, revisions } from '#server/db/schema/index.ts';
-import { type PageRow, changePage, findPage, tellPage } from '#server/features/pages/index.ts';
+import { type PageRow, changePage, editionsHolding, findPage, tellPage } from '#server/features/pages/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 import type { LightStep } from '#server/jobs/runner.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { documentOfPage, findReading, findRevision } from './queries.ts';
+import { addRevision } from './service.ts';
 import { hasPendingEdits, intoSharedText } from './shared-text.ts';
 
 /** Corrections come in bursts; what they teach is spread once the burst is over. */
@@ -69,19 +70,26 @@ export const teachStep = (tools: Tools): LightStep => ({
       .limit(pagesAtOnce)
       .all();
     const habits = habitsOfManual(db, job.subjectId);
-    for (const page of rows) if (teachPage(db, page, habits)) setImmediate(() => tellPage(tools, page.id));
+    for (const page of rows) if (teachPage(tools, page, habits)) setImmediate(() => tellPage(tools, page.id));
     const last = rows.at(-1);
     if (last !== undefined && rows.length === pagesAtOnce)
       spreadLessons(tools, job.subjectId, { after: last.position, inMs: breathMs });
   },
 });
 
-function teachPage(db: Connection, page: PageRow, habits: Habits): boolean {
+function teachPage(tools: Tools, page: PageRow, habits: Habits): boolean {
+  const { db } = tools;
   const reading = readingOf(db, page);
   const revision = findRevision(db, page.id, page.revision);
   if (reading === null || revision?.origin !== 'machine' || revision.readingId !== page.readingId) return false;
   const made = machineDocument(reading, habits);
   if (JSON.stringify(made) === JSON.stringify(revision.document) || hasPendingEdits(db, page.id)) return false;
+  if (editionsHolding(db, page.id, revision.number).length > 0) {
+    // What is published stays as it is: here the machine makes a revision of its own.
+    const note = 'Read in the light of corrected pages';
+    addRevision(tools, db, { page, who: null, note, document: made, origin: 'machine' });
+    return true;
+  }
   const document = intoSharedText(db, page.id, { document: made });
   const doubtCount = countDoubts(document);
   db.update(revisions).set({ document, doubtCount }).where(eq(revisions.id, revision.id)).run();

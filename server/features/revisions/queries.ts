@@ -1,4 +1,4 @@
-import { and, desc, eq } from 'drizzle-orm';
+import { and, asc, desc, eq } from 'drizzle-orm';
 import type { RevisionSummary } from '#shared/api/revisions.ts';
 import { type PageDocument, readDocument } from '#shared/document/page-document.ts';
 import { pages, readings, revisions } from '#server/db/schema/index.ts';
@@ -37,6 +37,9 @@ export const revisionRows = (
     .offset(offset)
     .all()
     .map((row) => ({ ...row, savedAt: row.savedAt.toISOString() }));
+
+export const revisionsOldestFirst = (db: Connection, pageId: string): RevisionRow[] =>
+  db.select().from(revisions).where(eq(revisions.pageId, pageId)).orderBy(asc(revisions.number)).all();
 
 export const insertRevision = (db: Connection, row: typeof revisions.$inferInsert): RevisionRow =>
   db.insert(revisions).values(row).returning().get();

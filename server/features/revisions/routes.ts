@@ -5,15 +5,16 @@ import * as revisionApi from '#shared/api/revisions.ts';
 import { partsOfManual } from '#shared/document/parts-of-manual.ts';
 import { tablesOf } from '#shared/document/tables.ts';
 import { textOf } from '#shared/document/text-of.ts';
-import { blockZones } from '#shared/document/zones.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { existingManual } from '#server/features/manuals/index.ts';
-import { existingPage, pageSummary } from '#server/features/pages/index.ts';
+import { existingPage } from '#server/features/pages/index.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { referenceRoutes } from './references.ts';
 import { documentOfPage, documentsOfManual, findRevision, revisionRows } from './queries.ts';
+import { authorsOfBlocks, restoreOnePart } from './parts.ts';
+import { pageReply, signPage, takeBackSignature } from './review.ts';
 import { restoreRevision, revisionReply, saveDocument, saveTogether } from './service.ts';
 
 export function revisionRoutes(api: ApiRouter, tools: Tools): void {
@@ -37,6 +38,12 @@ export function revisionRoutes(api: ApiRouter, tools: Tools): void {
   serve(api, revisionApi.restoreRevision, ({ user, params, body }) =>
     revisionReply(restoreRevision(tools, user, { ...params, note: body?.note ?? '' })),
   );
+  serve(api, revisionApi.signPage, ({ user, params, body }) => signPage(tools, user, { ...params, ...body }));
+  serve(api, revisionApi.takeBackSignature, ({ user, params }) => takeBackSignature(tools, user, params.pageId));
+  serve(api, revisionApi.restorePart, ({ user, params, body }) =>
+    revisionReply(restoreOnePart(tools, user, { ...params, ...body })),
+  );
+  serve(api, revisionApi.listBlockAuthors, ({ params }) => ({ items: authorsOfBlocks(db, params.pageId) }));
   documentRoutes(api, tools);
   partRoutes(api, tools);
   referenceRoutes(api, tools);
@@ -46,26 +53,15 @@ export function revisionRoutes(api: ApiRouter, tools: Tools): void {
 function documentRoutes(api: ApiRouter, { db }: Tools): void {
   const currentOf = (pageId: string) => {
     const page = existingPage(db, pageId);
-    return { page, document: documentOfPage(db, page.id, page.revision) };
+    return documentOfPage(db, page.id, page.revision);
   };
-  serve(api, pageApi.getPage, ({ params }) => {
-    const { page, document } = currentOf(params.pageId);
-    const { manualId, width, height } = page;
-    return {
-      ...pageSummary(page),
-      manualId,
-      width,
-      height,
-      document: document as Record<string, unknown> | null,
-      zones: document === null ? [] : blockZones(document),
-    };
-  });
+  serve(api, pageApi.getPage, ({ params }) => pageReply(db, existingPage(db, params.pageId)));
   serveRaw(api, pageApi.getPageText, ({ params, response }) => {
-    const { document } = currentOf(params.pageId);
+    const document = currentOf(params.pageId);
     response.type('text/plain').send(document === null ? '' : textOf(document));
   });
   serve(api, pageApi.getPageTables, ({ params }) => {
-    const { document } = currentOf(params.pageId);
+    const document = currentOf(params.pageId);
     return { items: document === null ? [] : tablesOf(document) };
   });
 }

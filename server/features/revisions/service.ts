@@ -99,7 +99,8 @@ export function saveSharedText(
   const current = documentOfPage(tx, page.id, page.revision);
   if (current !== null && nodeOf(current).eq(nodeOf(document.value))) return null;
   const who = { id: last.id, name: writers.map(({ name }) => name).join(', ') };
-  return addRevision(tools, tx, { page, who, note, document: document.value, origin: 'person' });
+  const authorIds = writers.map(({ id }) => id);
+  return addRevision(tools, tx, { page, who, authorIds, note, document: document.value, origin: 'person' });
 }
 
 /** The same on demand of a person, with a note, or by itself when the page falls quiet. Answers the page's revision. */
@@ -167,6 +168,8 @@ export function onCurrentPicture(tx: Connection, page: PageRow, old: RevisionRow
 type NewRevision = {
   page: PageRow;
   who: Who | null;
+  /** Where more than one wrote it. */
+  authorIds?: string[];
   note: string;
   document: PageDocument;
   origin: RevisionRow['origin'];
@@ -178,7 +181,7 @@ type NewRevision = {
 export function addRevision(
   tools: Tools,
   tx: Connection,
-  { page, who, note, document: given, origin, base }: NewRevision,
+  { page, who, authorIds = who === null ? [] : [who.id], note, document: given, origin, base }: NewRevision,
 ): RevisionRow {
   const document = intoSharedText(tx, page.id, { document: given, base });
   const doubtCount = countDoubts(document);
@@ -188,13 +191,15 @@ export function addRevision(
     origin,
     author: who?.name ?? 'Recognition',
     authorId: who?.id ?? null,
+    authorIds,
     readingId: page.readingId,
     note,
     doubtCount,
     document,
     savedAt: tools.now(),
   });
-  const state = origin === 'person' ? 'corrected' : page.state;
+  // Whoever signed the page off has not seen this.
+  const state = origin === 'person' || page.state === 'proofed' ? 'corrected' : page.state;
   changePage(tx, page.id, { revision: row.number, doubtCount, state });
   const subject = { subjectId: page.id, manualId: page.manualId };
   tools.announce(tx, 'revision.saved', subject);

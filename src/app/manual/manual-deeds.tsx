@@ -21,6 +21,9 @@ export function ManualDeeds({ manual, addScans }: { manual: Manual; addScans: Re
       <Button look="quiet" asChild>
         <Link to={`/manuals/${manual.id}/calculations`}>Calculations</Link>
       </Button>
+      <Button look="quiet" asChild>
+        <Link to={`/manuals/${manual.id}/editions`}>Editions</Link>
+      </Button>
       {mayChange ? (
         <>
           <Button look="quiet" onClick={() => setOpen('edit')}>

@@ -9,6 +9,7 @@ import { Workspace } from '#src/features/editor/workspace.tsx';
 import { HistoryButton } from '#src/features/history/history-button.tsx';
 import { PageWarnings } from '#src/features/reading/page-warnings.tsx';
 import { ReadPageDialog } from '#src/features/reading/read-page-dialog.tsx';
+import { ReviewDeeds } from '#src/features/review/review-deeds.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
 import { useTitle } from '#src/lib/use-title.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -54,6 +55,7 @@ function Correcting({ page }: { page: Page }) {
               <Link to={`/pages/${page.id}/read`}>Read this page</Link>
             </Button>
             <HistoryButton pageId={page.id} label={page.label} mayRestore hasUnsaved={isDirty} />
+            <ReviewDeeds page={page} hasUnsaved={isDirty} />
             {mayRead && page.imageVersion !== null ? <ReadPageDialog page={page} /> : null}
           </>
         )}

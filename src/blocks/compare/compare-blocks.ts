@@ -1,24 +1,23 @@
-import { diffWordsWithSpace } from 'diff';
+import { keyOfBlock } from '#shared/document/block-key.ts';
 import type { DocNode } from '#shared/document/define-block.ts';
 import { cellTexts } from '#shared/document/tables.ts';
 import { textOf } from '#shared/document/text-of.ts';
+import { type ComparedRow, compareTables } from './compare-tables.ts';
+import { type Piece, compareWords } from './compare-words.ts';
 
-/** A stretch of text that stands in both, only in the older, or only in the newer. */
-export type Piece = { kind: 'same' | 'gone' | 'new'; text: string };
 /** One block as it was and as it is; an unchanged one has a single piece of kind same. */
 export type ComparedBlock = {
   key: string;
   kind: string;
   change: 'same' | 'changed' | 'gone' | 'new' | 'form';
   lines: Piece[][];
+  /** Where it is a table in both. */
+  rows?: ComparedRow[];
 };
 
 /** Text of a block as lines: a table by its rows, anything else as it reads. */
 export const linesOf = (block: DocNode): string[] =>
   block.type === 'table' ? (block.content ?? []).map((row) => cellTexts(row).join(' | ')) : [textOf(block)];
-
-export const keyOfBlock = ({ attrs }: DocNode, at: number): string =>
-  typeof attrs?.['id'] === 'string' ? attrs['id'] : `at-${at}`;
 
 /** Blocks of two documents side by side, word by word; blocks are told by their names. */
 export function compareDocuments(older: DocNode, newer: DocNode): ComparedBlock[] {
@@ -54,7 +53,8 @@ export function compareBlock(key: string, older: DocNode | undefined, newer: Doc
   const lines = compareLines(linesOf(older), linesOf(newer));
   const isChanged = lines.some((pieces) => pieces.some((piece) => piece.kind !== 'same'));
   const change = isChanged ? 'changed' : JSON.stringify(older) === JSON.stringify(newer) ? 'same' : 'form';
-  return { key, kind, change, lines };
+  const areTables = older.type === 'table' && newer.type === 'table';
+  return { key, kind, change, lines, ...(areTables ? { rows: compareTables(older, newer) } : {}) };
 }
 
 /** Rows of a table that are alike stand beside each other; the others are compared word by word. */
@@ -79,9 +79,3 @@ function compareLines(older: readonly string[], newer: readonly string[]): Piece
   }
   return [...lines, ...older.slice(at).map((text): Piece[] => [{ kind: 'gone', text }])];
 }
-
-export const compareWords = (older: string, newer: string): Piece[] =>
-  diffWordsWithSpace(older, newer).map(({ value, added, removed }) => ({
-    kind: added ? 'new' : removed ? 'gone' : 'same',
-    text: value,
-  }));

@@ -5,6 +5,7 @@ import type { Quantity } from '#shared/api/quantities.ts';
 import type { LiveValue } from '#shared/calc/describe-value.ts';
 import type { InputValues } from '#shared/calc/evaluate.ts';
 import { channelTablesOfManual, planOfManual } from '#src/api/calculations.ts';
+import { valuesOfEdition } from '#src/api/editions.ts';
 import { quantitiesOfManual } from '#src/api/quantities.ts';
 import { useStored } from '#src/lib/use-stored.ts';
 import { createLiveStore, type LiveStore } from './live-store.ts';
@@ -30,29 +31,47 @@ type Shared = {
 const plainly = { view: 'both', setView: () => undefined, units: 'print', setUnits: () => undefined } as const;
 const SharedValues = createContext<Shared>({ store: null, ...plainly });
 
+type Props = {
+  manualId: string;
+  /** Its values as this edition holds them; those of the work without one. */ edition?: number | null;
+  children: ReactNode;
+};
+
 /** The values of one manual for everything inside. The setting is kept for the tab; an address may bring one (`?setting=channel:16`). */
-export function LiveValues({ manualId, children }: { manualId: string; children: ReactNode }) {
-  const { data } = useQuery(quantitiesOfManual(manualId));
-  const { data: tables } = useQuery(channelTablesOfManual(manualId));
-  const { data: stored } = useQuery(planOfManual(manualId));
+export function LiveValues({ manualId, edition = null, children }: Props) {
+  const held = useHeldValues(manualId, edition);
   const [view, setView] = useStored('benchleaf.values', valueViews, 'both');
   const [units, setUnits] = useStored('benchleaf.units', unitStyles, 'print');
   useState(() => takeFromAddress(manualId));
   const store = useMemo(() => {
-    if (data === undefined || tables === undefined || stored === undefined) return null;
+    if (held === null) return null;
     const inputs = readSetting(manualId);
     return createLiveStore({
       manualId,
-      quantities: data,
-      tables,
-      plan: stored.plan,
+      ...held,
       inputs,
       onChange: (setting) => writeSetting(manualId, setting),
       redraws: createRedraws({ drawNow: flushSync }),
     });
-  }, [manualId, data, tables, stored]);
+  }, [manualId, held]);
   const shared = useMemo(() => ({ store, view, setView, units, setUnits }), [store, view, setView, units, setUnits]);
   return <SharedValues.Provider value={shared}>{children}</SharedValues.Provider>;
+}
+
+type Held = Pick<Parameters<typeof createLiveStore>[0], 'quantities' | 'tables' | 'plan'>;
+
+/** The quantities, tables and plan of the work, or as an edition holds them; null until they are here. */
+function useHeldValues(manualId: string, edition: number | null): Held | null {
+  const ofWork = { enabled: edition === null };
+  const { data: quantities } = useQuery({ ...quantitiesOfManual(manualId), ...ofWork });
+  const { data: tables } = useQuery({ ...channelTablesOfManual(manualId), ...ofWork });
+  const { data: stored } = useQuery({ ...planOfManual(manualId), ...ofWork });
+  const { data: published } = useQuery({ ...valuesOfEdition(manualId, edition ?? 0), enabled: edition !== null });
+  return useMemo(() => {
+    if (edition !== null) return published ?? null;
+    if (quantities === undefined || tables === undefined || stored === undefined) return null;
+    return { quantities, tables, plan: stored.plan };
+  }, [edition, published, quantities, tables, stored]);
 }
 
 /** A setting in the address counts once, when the screen opens; from then on it is what the person makes of it. */

@@ -1,8 +1,9 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { RevisionSummary } from '#shared/api/revisions.ts';
-import { restoreRevision, revisionsOfPage } from '#src/api/revisions.ts';
+import { restorePart, restoreRevision, revisionsOfPage } from '#src/api/revisions.ts';
 import { counted } from '#shared/kit/counted.ts';
+import { Comparison, type RestorePart } from '#src/blocks/compare/comparison.tsx';
 import { saidBy } from '#src/lib/said-by.ts';
 import { writtenTime } from '#src/lib/written.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -12,7 +13,7 @@ import { Notice } from '#src/ui/notice.tsx';
 import { Pending } from '#src/ui/pending.tsx';
 import { RuledTable, Td, Th } from '#src/ui/ruled-table.tsx';
 import { toast } from '#src/ui/toast.ts';
-import { Comparison } from './comparison.tsx';
+import { BlockAuthors } from './block-authors.tsx';
 
 type Props = {
   pageId: string;
@@ -33,6 +34,7 @@ export function HistoryPanel({ pageId, mayRestore, hasUnsaved }: Props) {
     );
   }
   const pair = chosen ?? lastTwo(revisions);
+  const [older, newer] = [Math.min(pair.older, pair.newer), Math.max(pair.older, pair.newer)];
   return (
     <>
       {hasUnsaved && mayRestore ? <Notice kind="doubt" title="Save your text before you restore a revision." /> : null}
@@ -42,9 +44,34 @@ export function HistoryPanel({ pageId, mayRestore, hasUnsaved }: Props) {
           {revisions.length < 2 ? 'There is nothing to compare yet.' : 'Choose two different revisions to compare.'}
         </p>
       ) : (
-        <Comparison pageId={pageId} older={Math.min(pair.older, pair.newer)} newer={Math.max(pair.older, pair.newer)} />
+        <Compared
+          key={`${older} ${newer}`}
+          {...{ pageId, older, newer }}
+          mayRestore={mayRestore && newer === revisions[0]?.number}
+        />
       )}
+      <BlockAuthors pageId={pageId} />
     </>
+  );
+}
+
+type ComparedProps = {
+  pageId: string;
+  older: number;
+  newer: number;
+  /** The newer one is the page as it stands. */ mayRestore: boolean;
+};
+
+/** What differs; each block and each cell can be brought back by itself, as an edit of the page as it stands. */
+function Compared({ pageId, older, newer, mayRestore }: ComparedProps) {
+  const restore = useMutation({
+    ...restorePart(useQueryClient(), pageId),
+    onSuccess: ({ note }) => toast(`Restored: ${note.toLowerCase()}.`),
+    onError: (error) => toast.error(saidBy(error)),
+  });
+  const onRestore: RestorePart = (part) => restore.mutate({ number: older, baseRevision: newer, ...part });
+  return (
+    <Comparison {...{ pageId, older, newer }} onRestore={mayRestore && !restore.isPending ? onRestore : undefined} />
   );
 }
 

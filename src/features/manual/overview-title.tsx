@@ -1,7 +1,10 @@
 import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
+import { Link } from 'react-router';
 import type { Manual } from '#shared/api/manuals.ts';
+import { editionsOfManual } from '#src/api/editions.ts';
 import { proofOfManual } from '#src/api/quantities.ts';
+import { writtenDay } from '#src/lib/written.ts';
 import { BusyWords } from '#src/ui/pending.tsx';
 import { StateWord } from '#src/ui/state-word.tsx';
 import { TitleBlock } from '#src/ui/title-block.tsx';
@@ -16,7 +19,8 @@ export function OverviewTitle({ manual, reading }: { manual: Manual; reading: Re
       under={[equipment, maker].filter(Boolean).join(', ') || undefined}
       cells={[
         { label: 'Document', value: documentNumber ?? unknown, isFigure: documentNumber !== null, stays: true },
-        { label: 'Edition', value: editionDate ?? unknown, isFigure: editionDate !== null },
+        { label: 'Printed', value: editionDate ?? unknown, isFigure: editionDate !== null },
+        { label: 'Edition', value: <LatestEdition manualId={manual.id} />, stays: true },
         { label: 'Pages', value: String(pageCounts.all), isFigure: true },
         {
           label: 'Doubts',
@@ -32,6 +36,20 @@ export function OverviewTitle({ manual, reading }: { manual: Manual; reading: Re
 }
 
 const unknown = <span className="text-pencil">not recorded</span>;
+
+function LatestEdition({ manualId }: { manualId: string }) {
+  const { data: editions, isError } = useQuery(editionsOfManual(manualId));
+  if (isError) return 'could not be fetched';
+  if (editions === undefined) return <BusyWords>being looked up</BusyWords>;
+  const latest = editions.find(({ isLatest }) => isLatest);
+  if (latest === undefined) return <span className="text-pencil">none published</span>;
+  return (
+    <Link
+      className="word-link"
+      to={`/manuals/${manualId}/editions`}
+    >{`${latest.number}, ${writtenDay(latest.publishedAt)}`}</Link>
+  );
+}
 
 function ProofState({ manualId }: { manualId: string }) {
   const { data: proof, isError } = useQuery(proofOfManual(manualId));

@@ -13,11 +13,12 @@ import { ToggleGroup } from '#src/ui/toggle-group.tsx';
 import { PageNumbers } from './page-numbers.tsx';
 import { PageTile } from './page-tile.tsx';
 
-type Wanted = 'all' | 'doubts' | 'unread';
+type Wanted = 'all' | 'doubts' | 'unproofed' | 'unread';
 
 const wantedPages: Record<Wanted, (page: PageSummary) => boolean> = {
   all: () => true,
   doubts: ({ doubtCount }) => doubtCount > 0,
+  unproofed: ({ state }) => state === 'read' || state === 'corrected',
   unread: ({ state }) => state === 'waiting' || state === 'reading' || state === 'failed',
 };
 
@@ -58,6 +59,7 @@ function Strip({ manualId, pages }: { manualId: string; pages: readonly PageSumm
           choices={[
             { value: 'all', label: `All ${pages.length}` },
             { value: 'doubts', label: `With doubts ${count('doubts')}` },
+            { value: 'unproofed', label: `To be proofed ${count('unproofed')}` },
             { value: 'unread', label: `Not read ${count('unread')}` },
           ]}
         />

@@ -5,6 +5,7 @@ import { resolver } from '#shared/document/cross-references.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
 import { targetsIn } from '#src/api/references.ts';
+import type { ChangeBars } from '#src/blocks/compare/change-bars.ts';
 import { zoneKey } from '#src/blocks/look.ts';
 import { PageView } from '#src/blocks/page-view.tsx';
 import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
@@ -15,10 +16,15 @@ import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 
-type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: readonly Zone[]; query: string };
+type Props = {
+  page: Page;
+  /** Hits of a search, outlined on the scan. */ hits: readonly Zone[];
+  query: string;
+  bars?: ChangeBars | null;
+};
 
 /** A page that is read: its text beside its scan, each showing where the other stands. */
-export function ReadPage({ page, hits, query }: Props) {
+export function ReadPage({ page, hits, query, bars = null }: Props) {
   useAttention(page);
   const version = page.imageVersion ?? '';
   const document = page.document as DocNode | null;
@@ -78,7 +84,7 @@ export function ReadPage({ page, hits, query }: Props) {
             {document === null ? (
               <PageWaiting page={page} />
             ) : (
-              <PageView document={document} context={context} query={query} resolve={resolve} />
+              <PageView document={document} context={context} query={query} resolve={resolve} bars={bars} />
             )}
           </div>
         </div>
