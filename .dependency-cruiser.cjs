@@ -15,7 +15,7 @@ const sharedModules = [
   'api',
 ];
 const serverLayers = ['config', 'db', 'storage', 'jobs', 'http', 'features'];
-const serverFeatures = ['accounts', 'manuals', 'pages', 'recognition', 'revisions', 'coediting', 'values', 'search'];
+const serverFeatures = ['accounts', 'manuals', 'pages', 'recognition', 'revisions', 'coediting', 'comments', 'values', 'search'];
 const sourceLayers = ['lib', 'ui', 'api', 'blocks', 'scan', 'features', 'app'];
 
 const forbid = (name, from, to) => ({ name, severity: 'error', from, to });

@@ -65,9 +65,10 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
   });
 
   const sendMail = createMailer(tools);
+  const publicUrl = config.publicUrl ?? url;
   const auth = createAuth(tools, {
     secret: readOrCreateSecret(config.dataDir),
-    publicUrl: config.publicUrl ?? url,
+    publicUrl,
     trustedOrigins,
     sendMail,
   });
@@ -75,7 +76,8 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
   const sharedPages = createSharedPages(tools);
   const { presence } = sharedPages;
   const addPages = addPagesBy(announce);
-  const appTools: AppTools = { ...tools, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
+  const mail = { sendMail, publicUrl };
+  const appTools: AppTools = { ...tools, ...mail, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
   const { app, api } = createApp(appTools);
   const socket = coeditingSocket(sharedPages, { findSession: api.findSession, trustedOrigins });
   server.removeAllListeners('request');

@@ -10,6 +10,7 @@ export const liveEvent = z.discriminatedUnion('type', [
   z.object({ type: z.literal('pages'), manualId: id }),
   z.object({ type: z.literal('source'), manualId: id, sourceId: id }),
   z.object({ type: z.literal('quantities'), manualId: id }),
+  z.object({ type: z.literal('comments'), manualId: id, pageId: id }),
   pagePresence.extend({ type: z.literal('presence'), manualId: id }),
   z.object({ type: z.literal('queue'), waiting: z.number().int(), active: z.number().int() }),
 ]);
@@ -18,7 +19,7 @@ export type LiveEvent = z.infer<typeof liveEvent>;
 export const getEvents = defineEndpoint({
   method: 'get',
   path: '/api/events',
-  summary: 'Server-sent events: page and source states, quantities, presence, the queue',
+  summary: 'Server-sent events: page and source states, quantities, comments, presence, the queue',
   action: 'read-manuals',
   reply: liveEvent,
   replyKind: 'events',
