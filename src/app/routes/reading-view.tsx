@@ -6,6 +6,8 @@ import type { Zone } from '#shared/document/define-block.ts';
 import { onePage } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
+import { CommentsPanel } from '#src/features/comments/comments-panel.tsx';
+import { useNotesOfPage } from '#src/features/comments/use-notes-of-page.ts';
 import { HistoryButton } from '#src/features/history/history-button.tsx';
 import { ReadPage } from '#src/features/reader/read-page.tsx';
 import { SettingBar } from '#src/features/reader/setting-bar.tsx';
@@ -37,6 +39,9 @@ function Reading({ page }: { page: Page }) {
   const boxes = asked.get('boxes') ?? '';
   const hits = useMemo(() => zonesFrom(boxes), [boxes]);
   const mayEdit = useCan('edit-pages');
+  const mayComment = useCan('comment');
+  const notes = useNotesOfPage(page.id);
+  const hasMargin = mayComment || notes.length > 0;
   return (
     <LiveValues manualId={page.manualId}>
       <div className="desk">
@@ -50,7 +55,16 @@ function Reading({ page }: { page: Page }) {
           <Button onClick={() => window.print()}>Print</Button>
         </PageTitle>
         <SettingBar manualId={page.manualId} startsOpen />
-        <ReadPage page={page} hits={hits} query={asked.get('q') ?? ''} />
+        <ReadPage
+          {...{ page, hits, notes }}
+          query={asked.get('q') ?? ''}
+          mayMark={mayComment}
+          comments={
+            hasMargin
+              ? (places) => <CommentsPanel page={page} notes={places} asked={asked.get('comment')} hasButton />
+              : null
+          }
+        />
       </div>
     </LiveValues>
   );

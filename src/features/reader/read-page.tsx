@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { type ReactNode, useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
@@ -10,12 +10,23 @@ import { ScanViewer } from '#src/scan/scan-viewer.tsx';
 import { Spine, ticksOf } from '#src/scan/spine.tsx';
 import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
+import { type PageNote, type PageNotes, usePageNotes } from '#src/scan/use-page-notes.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 
-type Props = { page: Page; /** Hits of a search, outlined on the scan. */ hits: readonly Zone[]; query: string };
+type Props = {
+  page: Page;
+  /** Hits of a search, outlined on the scan. */
+  hits: readonly Zone[];
+  query: string;
+  /** Comments of the page. */
+  notes: readonly PageNote[];
+  /** How they are shown in the margin; null leaves the margin out. */
+  comments: ((notes: PageNotes) => ReactNode) | null;
+  mayMark: boolean;
+};
 
 /** A page that is read: its text beside its scan, each showing where the other stands. */
-export function ReadPage({ page, hits, query }: Props) {
+export function ReadPage({ page, hits, query, notes: given, comments, mayMark }: Props) {
   useAttention(page);
   const version = page.imageVersion ?? '';
   const document = page.document as DocNode | null;
@@ -25,17 +36,23 @@ export function ReadPage({ page, hits, query }: Props) {
     [page.id, version],
   );
   const boxes = useMemo(() => (document === null ? [] : boxesOf(document)), [document]);
+  const notes = usePageNotes({ notes: given, text: document, textNow: () => document, link });
+  const { boxes: noteBoxes, labelAt } = notes;
   const shown = useMemo(
-    () => [...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
-    [boxes, hits],
+    () => [...noteBoxes, ...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
+    [noteBoxes, boxes, hits],
   );
-  const ticks = useMemo(() => ticksOf(boxes, (key) => wordsAt(document, key)), [boxes, document]);
+  const ticks = ticksOf([...noteBoxes, ...boxes], (key, kind) =>
+    kind === 'note' ? labelAt(key) : wordsAt(document, key),
+  );
   const size =
     page.imageVersion !== null && page.width !== null && page.height !== null
       ? { width: page.width, height: page.height }
       : null;
   return (
     <TwoLeaves
+      keepsMargin={notes.draft !== null}
+      margin={comments?.(notes)}
       scan={
         <ScanViewer
           pageId={page.id}
@@ -45,7 +62,11 @@ export function ReadPage({ page, hits, query }: Props) {
           boxes={shown}
           active={link.active}
           onHover={link.setActive}
-          onPick={(key) => void link.showInText(key)}
+          onPick={(key) => {
+            link.showInText(key);
+            notes.openAt(key);
+          }}
+          onMark={mayMark ? notes.beginAt : undefined}
           focusBox={link.focusBox}
         />
       }
@@ -54,7 +75,10 @@ export function ReadPage({ page, hits, query }: Props) {
           ticks={ticks}
           height={page.height}
           active={link.active}
-          onGo={(key) => void link.goTo(key)}
+          onGo={(key) => {
+            link.goTo(key);
+            notes.openAt(key);
+          }}
           onHover={link.setActive}
         />
       }
