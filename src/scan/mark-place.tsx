@@ -29,7 +29,8 @@ export function zoneUnderRect(rect: Rect, { x, y, scale }: ScanPlace, page: Size
 
 type Marking = {
   isOn: boolean;
-  turn: () => void;
+  /** Begins or ends it; the keys then go to the frame that the scan lies in, and all of it comes into sight. */
+  turn: (frame: HTMLElement | null | undefined) => void;
   mark: (rect: Rect) => void;
   /** Whether the key was meant for the marking. */
   onKey: (event: KeyboardEvent) => boolean;
@@ -48,7 +49,11 @@ export function useMarking(size: Size | null, onMark: ((zone: Zone) => void) | u
   };
   return {
     ...{ isOn, mark },
-    turn: () => setOn(!isOn),
+    turn: (frame) => {
+      setOn(!isOn);
+      frame?.focus({ preventScroll: true });
+      frame?.scrollIntoView({ block: 'nearest' });
+    },
     movedTo: (now) => {
       place.current = now;
     },
@@ -81,9 +86,14 @@ export function MarkPlace({ onMark }: { onMark: (rect: Rect) => void }) {
       className="mark-place"
       onPointerDown={(event) => {
         event.currentTarget.setPointerCapture(event.pointerId);
-        setDrag({ from: at(event), to: at(event) });
+        const point = at(event);
+        setDrag({ from: point, to: point });
       }}
-      onPointerMove={(event) => setDrag((before) => (before === null ? null : { ...before, to: at(event) }))}
+      onPointerMove={(event) => {
+        // Read at once: by the time the state is worked out the event no longer says where it was.
+        const to = at(event);
+        setDrag((before) => (before === null ? null : { ...before, to }));
+      }}
       onPointerUp={() => {
         setDrag(null);
         if (rect !== null && rect.width >= leastDrag && rect.height >= leastDrag) onMark(rect);

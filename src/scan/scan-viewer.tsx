@@ -82,13 +82,7 @@ export function ScanViewer({
     <section aria-label={label} className="scan">
       <ScanButtons scan={scan}>
         {onMark === undefined ? null : (
-          <MarkButton
-            isOn={marking.isOn}
-            onPress={() => {
-              marking.turn();
-              frame.current?.parentElement?.focus();
-            }}
-          />
+          <MarkButton isOn={marking.isOn} onPress={() => marking.turn(frame.current?.parentElement)} />
         )}
       </ScanButtons>
       {hasFailed ? (
@@ -132,18 +126,24 @@ function ScanButtons({ scan, children }: { scan: { current: OpenScan | null }; c
   );
 }
 
+/** Drawn around the print instead of over it. */
+const padding: Partial<Record<ScanBox['kind'], number>> = { note: 4 };
+
 const Boxes = memo(function Boxes({ boxes }: { boxes: readonly ScanBox[] }) {
-  return boxes.map(({ key, box: [x, y, width, height], kind }) => (
-    <rect
-      key={`${kind}-${key}`}
-      data-kind={kind}
-      x={x}
-      y={y}
-      width={width}
-      height={height}
-      vectorEffect="non-scaling-stroke"
-    />
-  ));
+  return boxes.map(({ key, box: [x, y, width, height], kind }) => {
+    const pad = padding[kind] ?? 0;
+    return (
+      <rect
+        key={`${kind}-${key}`}
+        data-kind={kind}
+        x={x - pad}
+        y={y - pad}
+        width={width + 2 * pad}
+        height={height + 2 * pad}
+        vectorEffect="non-scaling-stroke"
+      />
+    );
+  });
 });
 
 function ActiveBox({ boxes, active }: { boxes: readonly ScanBox[]; active: string | null }) {

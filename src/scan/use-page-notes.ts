@@ -64,12 +64,15 @@ export function usePageNotes({ notes, text, textNow, link }: Given): PageNotes {
     () => (about === null ? stretchAt(places, lit) : findAnchor(flat, about).stretch),
     [about, flat, places, lit],
   );
-  const wordsOf = useWordLight({ leaf, flat, resting, lit: litStretch });
+  const bringIntoSight = useWordLight({ leaf, flat, resting, lit: litStretch });
 
   const start = (anchor: Anchor | null): void => {
     if (draft === null) returnTo.current = document.activeElement;
     setDraft(anchor ?? 'nowhere');
     if (anchor?.zone != null) setActive(zoneKey(anchor.zone));
+    const stretch = anchor === null ? null : findAnchor(flat, anchor).stretch;
+    // On a phone the form opens over the lower part of the sheet: the words must not lie beneath it.
+    if (stretch !== null) requestAnimationFrame(() => bringIntoSight(stretch));
   };
   const light = useCallback(
     (id: string | null) => {
@@ -79,9 +82,10 @@ export function usePageNotes({ notes, text, textNow, link }: Given): PageNotes {
     },
     [places, setActive],
   );
+  const labelAt = useCallback((key: string) => labels.get(key) ?? '', [labels]);
   return {
     ...{ places, boxes, draft, light, opened },
-    labelAt: (key) => labels.get(key) ?? '',
+    labelAt,
     begin: () => start(anchorOfChosen({ leaf, text: textNow(), chosen: chosen(), pinned: link.focusBox })),
     beginAt: (zone) => start({ block: null, quote: '', at: 0, zone }),
     endDraft: (keepsFocus = false) => {
@@ -93,7 +97,7 @@ export function usePageNotes({ notes, text, textNow, link }: Given): PageNotes {
       const place = places.get(id);
       setLit(id);
       if (place?.zone != null) showOnScan(zoneKey(place.zone));
-      if (place?.stretch != null) wordsOf(place.stretch);
+      if (place?.stretch != null) bringIntoSight(place.stretch);
     },
     openAt: (key) => {
       const note = notes.find(({ id, isOpen }) => isOpen && keyOf(places.get(id)) === key);

@@ -55,8 +55,18 @@ export function useWordLight({ leaf, flat, resting, lit }: Given): (stretch: Fla
     (stretch) => {
       const range = rangeOf(spotsNow() ?? [], stretch);
       const element = range?.startContainer.parentElement;
-      if (element != null) scrollInLeaf(element);
+      if (range != null && element != null && !isInSight(range, leaf.current)) scrollInLeaf(element);
     },
-    [spotsNow],
+    [leaf, spotsNow],
   );
+}
+
+/** On a phone the margin lies over the lower part of the sheet (leaves.css). */
+const coveredShare = (): number => (window.innerWidth < 768 ? 0.56 : 0);
+
+function isInSight(range: Range, leaf: HTMLElement | null): boolean {
+  const [inner, outer] = [range.getBoundingClientRect(), leaf?.getBoundingClientRect()];
+  if (outer === undefined) return false;
+  const foot = Math.min(outer.bottom, window.innerHeight * (1 - coveredShare()));
+  return inner.top >= Math.max(outer.top, 0) && inner.bottom <= foot;
 }

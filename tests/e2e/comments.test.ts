@@ -107,6 +107,7 @@ describe('a question about a value', () => {
     await asking.getByRole('link', { name: /145\.900/ }).click();
     await panel(asking).getByRole('button', { name: 'Resolve' }).click();
     await panel(asking).getByText('1 resolved').waitFor();
+    await asking.waitForFunction(() => document.activeElement?.textContent?.startsWith('Comments') === true);
     await panel(answering).getByText('1 resolved').waitFor();
   });
 

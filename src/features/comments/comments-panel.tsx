@@ -79,7 +79,6 @@ function Draft({ page, notes: { draft, endDraft }, onMade }: DraftProps) {
   if (draft === 'nowhere') return <Nowhere onClose={() => endDraft()} />;
   return (
     <NewComment
-      key={JSON.stringify(draft)}
       page={page}
       anchor={draft}
       onCancel={() => endDraft()}
@@ -171,7 +170,7 @@ function useFocusOf(
     const element = document.getElementById(threadElementId(wanted.id));
     if (element === null) return;
     done.current = wanted;
-    element.focus();
+    element.focus({ preventScroll: true });
     element.scrollIntoView({ block: 'nearest' });
   }, [wanted, threads]);
   const latest: RefObject<() => void> = useRef(onWanted);

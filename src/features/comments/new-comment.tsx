@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { CommentKind } from '#shared/api/comments.ts';
 import type { Page } from '#shared/api/pages.ts';
 import type { Anchor } from '#shared/document/find-anchor.ts';
@@ -19,8 +19,11 @@ type Props = { page: Page; anchor: Anchor; onMade: (id: string) => void; onCance
 export function NewComment({ page, anchor, onMade, onCancel }: Props) {
   const [kind, setKind] = useState<CommentKind>('question');
   const add = useMutation(addComment(useQueryClient(), page.id));
+  const section = useRef<HTMLElement>(null);
+  // Another place may be chosen while the words are being written: they stay, and are gone on with.
+  useEffect(() => section.current?.querySelector('textarea')?.focus(), [anchor]);
   return (
-    <section aria-label="New comment" className="thread">
+    <section ref={section} aria-label="New comment" className="thread">
       <About anchor={anchor} page={page} zone={anchor.zone} />
       <RemarkForm
         label={kind === 'question' ? 'Your question' : 'Your note'}

@@ -72,7 +72,8 @@ export function Remark({ pageId, remark, isAnswered = false, onSettled }: Props)
         intro={isAnswered ? 'The replies stay. What you wrote cannot be brought back.' : 'They cannot be brought back.'}
         deed="Delete them"
         busy={remove.isPending && 'Deleting …'}
-        onConfirm={() => remove.mutate(remark.id, { onSuccess: done })}
+        // By the promise: the words may have left the screen, and their callbacks with them, before the answer is dealt with.
+        onConfirm={() => void remove.mutateAsync(remark.id).then(done, () => undefined)}
         error={remove.error === null ? null : <Failure what="They were not deleted" error={remove.error} />}
       />
     </>

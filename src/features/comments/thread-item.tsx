@@ -98,6 +98,9 @@ function ThreadDeeds({ page, thread, onGone, onDone }: DeedsProps) {
     setReplying(false);
     onDone();
   };
+  // By the promise: the item has left its list, and its callbacks with it, before the answer is dealt with.
+  const turn = (): Promise<void> =>
+    resolve.mutateAsync({ commentId: thread.id, resolved: !isResolved }).then(onGone, () => undefined);
   if (isReplying) {
     return (
       <RemarkForm
@@ -115,10 +118,7 @@ function ThreadDeeds({ page, thread, onGone, onDone }: DeedsProps) {
       <div className="mt-2 flex flex-wrap gap-1">
         <Button onClick={() => setReplying(true)}>Reply</Button>
         {mayResolve ? (
-          <Button
-            busy={resolve.isPending && (isResolved ? 'Opening it …' : 'Resolving …')}
-            onClick={() => resolve.mutate({ commentId: thread.id, resolved: !isResolved }, { onSuccess: onGone })}
-          >
+          <Button busy={resolve.isPending && (isResolved ? 'Opening it …' : 'Resolving …')} onClick={() => void turn()}>
             {isResolved ? 'Open it again' : 'Resolve'}
           </Button>
         ) : null}

@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { PersonName } from '#shared/api/people.ts';
 import { everyName } from '#src/api/comments.ts';
+import { me } from '#src/api/session.ts';
 import { mentionAt, peopleFor, withMention } from './mention.ts';
 
 type Mentions = {
@@ -18,7 +19,9 @@ type Mentions = {
 
 /** The list of people that an @ opens. */
 export function useMentions(words: string): Mentions {
-  const { data: people = [] } = useQuery(everyName);
+  const { data: everybody = [] } = useQuery(everyName);
+  const { data: person } = useQuery(me);
+  const people = everybody.filter(({ id }) => id !== person?.id);
   const [caret, setCaret] = useState(words.length);
   const [at, setAt] = useState(0);
   /** The @ that needs no list any more. */

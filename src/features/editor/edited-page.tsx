@@ -80,7 +80,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
     help: () => setKeysOpen(true),
   };
   useKeys(deeds);
-  const all = [...notes.boxes, ...boxes];
+  const all = useMemo(() => [...notes.boxes, ...boxes], [notes.boxes, boxes]);
   const onScan = { boxes: all, active: link.active, onHover: link.setActive, focusBox: link.focusBox };
   const ticks = ticksOf(all, (key, kind) => (kind === 'note' ? notes.labelAt(key) : wordsAt(shown, key)));
   return (
@@ -91,7 +91,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
       {settingBar}
       <PageNotices standing={shared.standing} />
       <TwoLeaves
-        keepsMargin={notes.draft !== null}
+        keepsMargin={notes.draft !== null || notes.opened !== null}
         scan={<ScanViewer {...scan} {...onScan} onPick={(key) => goTo(key, 'text')} onMark={notes.beginAt} />}
         spine={
           <Spine

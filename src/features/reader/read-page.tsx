@@ -42,8 +42,9 @@ export function ReadPage({ page, hits, query, notes: given, comments, mayMark }:
     () => [...noteBoxes, ...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
     [noteBoxes, boxes, hits],
   );
-  const ticks = ticksOf([...noteBoxes, ...boxes], (key, kind) =>
-    kind === 'note' ? labelAt(key) : wordsAt(document, key),
+  const ticks = useMemo(
+    () => ticksOf([...noteBoxes, ...boxes], (key, kind) => (kind === 'note' ? labelAt(key) : wordsAt(document, key))),
+    [noteBoxes, boxes, labelAt, document],
   );
   const size =
     page.imageVersion !== null && page.width !== null && page.height !== null
@@ -51,7 +52,7 @@ export function ReadPage({ page, hits, query, notes: given, comments, mayMark }:
       : null;
   return (
     <TwoLeaves
-      keepsMargin={notes.draft !== null}
+      keepsMargin={notes.draft !== null || notes.opened !== null}
       margin={comments?.(notes)}
       scan={
         <ScanViewer
