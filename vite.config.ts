@@ -6,11 +6,13 @@ import { defineConfig } from 'vitest/config';
 // cores carry no more.
 export default defineConfig({
   plugins: [react(), tailwindcss()],
+  // Two copies of the shared-text library would not know each other's texts.
+  resolve: { dedupe: ['yjs'] },
   // The editor and the scan viewer are large, and are only fetched with the screens that need them.
   build: { outDir: 'dist/client', chunkSizeWarningLimit: 900 },
   server: {
     host: '127.0.0.1',
-    proxy: { '/api': { target: process.env['API_URL'] ?? 'http://127.0.0.1:3000', changeOrigin: false } },
+    proxy: { '/api': { target: process.env['API_URL'] ?? 'http://127.0.0.1:3000', changeOrigin: false, ws: true } },
   },
   test: {
     projects: [

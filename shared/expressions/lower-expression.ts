@@ -49,8 +49,10 @@ export const startCode = (slotCount: number): LoweredCode => ({
 export function lowerExpression({ root, symbols }: Expression, { code, scope, owner }: Lowering): void {
   const lowering = { code, scope, owner };
   let value = lower(root, lowering);
-  const passedOn = passesOn(root);
-  for (const name of symbols) if (!passedOn.has(name)) value = emit('needs', [value, scope.slotOf(name)], lowering);
+  if (mayStepOver(root)) {
+    const passedOn = passesOn(root);
+    for (const name of symbols) if (!passedOn.has(name)) value = emit('needs', [value, scope.slotOf(name)], lowering);
+  }
   const last = -value - 1;
   // The usual last operations settle the value as they write it: one step less for most quantities.
   const settling = value < 0 ? settlingCodes[code.codes[last] ?? -1] : undefined;
@@ -75,6 +77,13 @@ const fusedCodes = kernels.map((_, first) =>
     findCode(`${nameOf(first)}${nameOf(second).replace(/^./, (letter) => letter.toUpperCase())}`),
   ),
 );
+
+/** Whether a formula has anything at all that can step over a missing value; most have not. */
+const mayStepOver = (node: ExpressionNode): boolean =>
+  node.kind === 'conditional' ||
+  node.kind === 'lookup' ||
+  (node.kind === 'arithmetic' && node.operator === '^') ||
+  childrenOf(node).some(mayStepOver);
 
 /**
  * The names whose missing value is sure to make the result missing. A case that is not chosen, a table and an exponent

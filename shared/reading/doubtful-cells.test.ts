@@ -18,6 +18,12 @@ describe('cells that are worth a second look', () => {
     expect(cells[1]?.zone).toEqual([1860, 550, 26, 32]);
   });
 
+  it('are fewer among long descriptions, which take long to read', () => {
+    const long = list.map((line) => line.replace('Ceramic, tubular  ', 'Tubular, 500 v d c'));
+    const doubtful = (confidence: number): number => doubtfulCells(readWords(long, { 'Tubular,': confidence })).length;
+    expect([doubtful(60), doubtful(40)]).toEqual([1, 2]);
+  });
+
   it('are none on a page without tables', () => {
     expect(doubtfulCells(readWords(['Some text of no great length.'], { great: 20 }))).toEqual([]);
   });
@@ -31,6 +37,15 @@ describe('two readings of a cell', () => {
       sure,
       sure,
       doubtful,
+    ]);
+  });
+
+  it('never lose a sign to a surer reading without it, nor gain a stray mark', () => {
+    const sign = readWords(['±20%'], { '±20%': 40 });
+    const plain = readWords(['C202'], { C202: 40 });
+    expect([betterReading(sign, readWords(['220%'])), betterReading(plain, readWords(['© C202']))]).toEqual([
+      sign,
+      plain,
     ]);
   });
 

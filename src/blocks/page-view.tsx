@@ -1,4 +1,6 @@
 import { Fragment, type ReactNode, memo } from 'react';
+import { Link } from 'react-router';
+import { type Leading, type Resolve, leadingStretches } from '#shared/document/cross-references.ts';
 import type { DocNode, Mark, Zone } from '#shared/document/define-block.ts';
 import type { MarkKind } from '#shared/document/marks.ts';
 import { type BlockKind, blockOf } from '#shared/document/registry.ts';
@@ -16,18 +18,23 @@ type Props = {
   context: LookContext;
   /** What was searched for, as typed; each occurrence is marked. */
   query?: string;
+  /** What the texts of the manual can point at; null until it is known. */
+  resolve?: Resolve | null;
 };
 
 /** A page document as it is read: no editor, every live value alive. */
-export const PageView = memo(function PageView({ document, context, query = '' }: Props) {
+export const PageView = memo(function PageView({ document, context, query = '', resolve = null }: Props) {
   const marked = stretchesOf(document, query);
-  return <>{drawNode({ node: document, context, marked, columns: [] })}</>;
+  const leading = resolve === null ? nothingLeads : leadingStretches(document, resolve);
+  return <>{drawNode({ node: document, context, marked, leading, columns: [] })}</>;
 });
+const nothingLeads: ReadonlyMap<DocNode, Leading[]> = new Map();
 
 type Drawing = {
   node: DocNode;
   context: LookContext;
   marked: ReadonlyMap<DocNode, Stretch[]>;
+  leading: ReadonlyMap<DocNode, Leading[]>;
   columns: readonly TableColumn[];
   at?: number;
 };
@@ -68,17 +75,19 @@ function Live({ node }: { node: DocNode }) {
   );
 }
 
-function drawText({ node, context, marked }: Drawing): ReactNode {
+function drawText({ node, context, marked, leading }: Drawing): ReactNode {
   const text = node.text ?? '';
   const stretches = marked.get(node) ?? [];
-  const inner: ReactNode = stretches.length === 0 ? text : cut(text, stretches);
+  const leads = leading.get(node) ?? [];
+  const inner: ReactNode = leads.length === 0 ? cut(text, stretches) : withLinks(text, { leads, stretches });
   return [...(node.marks ?? [])].reverse().reduce<ReactNode>((inside, mark) => drawMark(mark, inside, context), inner);
 }
 
 const drawMark = ({ type, attrs }: Mark, inside: ReactNode, context: LookContext): ReactNode =>
   Object.hasOwn(markLooks, type) ? drawLook(markLooks[type as MarkKind](attrs ?? {}, context), inside) : inside;
 
-function cut(text: string, stretches: readonly Stretch[]): ReactNode[] {
+function cut(text: string, stretches: readonly Stretch[]): ReactNode {
+  if (stretches.length === 0) return text;
   const pieces: ReactNode[] = [];
   let at = 0;
   for (const [from, to] of stretches) {
@@ -87,5 +96,38 @@ function cut(text: string, stretches: readonly Stretch[]): ReactNode[] {
     at = to;
   }
   if (at < text.length) pieces.push(text.slice(at));
+  return pieces;
+}
+
+type Pieces = { leads: readonly Leading[]; stretches: readonly Stretch[] };
+
+/** References to other places of the manual as links, what was searched for marked inside and between them. */
+function withLinks(text: string, { leads, stretches }: Pieces): ReactNode[] {
+  const part = (from: number, to: number): ReactNode =>
+    cut(
+      text.slice(from, to),
+      stretches
+        .filter(([start, end]) => start < to && end > from)
+        .map(([start, end]) => [Math.max(0, start - from), Math.min(end, to) - from]),
+    );
+  const pieces: ReactNode[] = [];
+  let at = 0;
+  for (const { from, to, target } of leads) {
+    if (from < at) continue;
+    if (from > at) pieces.push(<Fragment key={at}>{part(at, from)}</Fragment>);
+    const zone = target.zone === null ? '' : `?boxes=${target.zone.map(Math.round).join()}`;
+    pieces.push(
+      <Link
+        key={`to ${from}`}
+        to={`/pages/${target.pageId}/read${zone}`}
+        className="cross-reference"
+        title={`${target.kind} ${target.name}, on page ${target.pageLabel}`}
+      >
+        {part(from, to)}
+      </Link>,
+    );
+    at = to;
+  }
+  if (at < text.length) pieces.push(<Fragment key={at}>{part(at, text.length)}</Fragment>);
   return pieces;
 }

@@ -133,6 +133,38 @@ describe('a parts list', () => {
   });
 });
 
+describe('references', () => {
+  it('lead to what the manual has, and are listed where it has it not', async () => {
+    const seen = doc(
+      paragraph(text('See figure 5-3 and figure 9-9, and check C1.')),
+      { type: 'caption', attrs: { of: 'figure', zone: [1, 2, 3, 4] }, content: [text('Figure 5-3. Chain')] },
+      partsTable(),
+    );
+    await save(0, seen);
+    const { body } = await editor.get(`/api/manuals/${manualId}/targets`);
+    expect(body.items).toEqual(
+      expect.arrayContaining([
+        expect.objectContaining({ kind: 'figure', name: '5-3', pageId, zone: [1, 2, 3, 4] }),
+        expect.objectContaining({ kind: 'part', name: 'C3', pageId }),
+      ]),
+    );
+    const open = () => editor.get(`/api/manuals/${manualId}/open-references`);
+    expect((await open()).body.items).toMatchObject([{ text: 'figure 9-9', pageId }]);
+    await save(1, doc(paragraph(text('See figure 5-3.'))));
+    expect((await open()).body.items).toMatchObject([{ text: 'figure 5-3' }]);
+  });
+});
+
+describe('page numbers', () => {
+  it('are found in the running feet', async () => {
+    await save(0, doc({ type: 'running', attrs: { place: 'foot' }, content: [text('5-3')] }, paragraph(text('x'))));
+    expect((await editor.get(`/api/manuals/${manualId}/page-numbers`)).body).toEqual({
+      pages: [{ pageId, label: '1', printed: '5-3' }],
+      problems: [],
+    });
+  });
+});
+
 describe('searching', () => {
   const search = async (query: string) =>
     (await (await server.as('reader')).get(`/api/search?${query}&manualId=${manualId}`)).body;

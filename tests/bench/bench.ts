@@ -1,4 +1,5 @@
 import { benchCoediting } from './coediting.ts';
+import { benchDoubts } from './doubts.ts';
 import { benchFrames } from './frames.ts';
 import { benchReading } from './reading.ts';
 import { benchRecognition } from './recognition.ts';
@@ -16,6 +17,7 @@ const benches: Record<string, (args: readonly string[]) => Promise<string[]> | s
   recompute: benchRecompute,
   search: benchSearch,
   frames: benchFrames,
+  doubts: benchDoubts,
   coediting: benchCoediting,
 };
 

@@ -23,7 +23,7 @@ async function manualOf(server: TestServer): Promise<string> {
           id: `${manualId}-${definition.symbol}`,
           manualId,
           symbol: definition.symbol,
-          definition,
+          definition: { ...definition, label: definition.symbol },
           createdAt: new Date(0),
         })
         .run();
@@ -46,28 +46,30 @@ async function manualOf(server: TestServer): Promise<string> {
   return pageId;
 }
 
+/** Runs in the browser. As text, because what runs this file adds helpers to functions that a browser does not have. */
+const watcher = `
+  window.seen = { frames: [], long: [] };
+  new PerformanceObserver((list) => {
+    for (const { duration } of list.getEntries()) seen.long.push(duration);
+  }).observe({ entryTypes: ['longtask'] });
+  let last = performance.now();
+  function frame(now) {
+    seen.frames.push(now - last);
+    last = now;
+    requestAnimationFrame(frame);
+  }
+  requestAnimationFrame(frame);
+`;
+
 /** Types into the setting bar and watches every frame. */
 async function watch(page: Page): Promise<{ frames: number[]; long: number[] }> {
-  await page.evaluate(() => {
-    const seen = { frames: [] as number[], long: [] as number[] };
-    Object.assign(window, { seen });
-    new PerformanceObserver((list) => {
-      for (const { duration } of list.getEntries()) seen.long.push(duration);
-    }).observe({ entryTypes: ['longtask'] });
-    let last = performance.now();
-    const frame = (now: number): void => {
-      seen.frames.push(now - last);
-      last = now;
-      requestAnimationFrame(frame);
-    };
-    requestAnimationFrame(frame);
-  });
+  await page.evaluate(watcher);
   const field = page.getByLabel('q0').first();
   await field.click();
   await field.selectText();
   for (const key of typed) await page.keyboard.type(key, { delay: 60 });
   await page.waitForTimeout(300);
-  return page.evaluate(() => (window as unknown as { seen: { frames: number[]; long: number[] } }).seen);
+  return page.evaluate('seen');
 }
 
 /** What typing in the setting bar costs in a browser, on a page with a thousand live values. */

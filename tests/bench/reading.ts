@@ -1,18 +1,13 @@
 import { mkdtempSync, readFileSync } from 'node:fs';
-import { createRequire } from 'node:module';
 import os from 'node:os';
 import path from 'node:path';
-import sharp from 'sharp';
 import Tesseract, { OEM } from 'tesseract.js';
 import { projectRoot } from '#server/db/database.ts';
 import { drawPage } from '#server/features/pages/draw.ts';
 import { readPage } from '#server/features/recognition/read.ts';
+import { languageData } from './other-engines.ts';
+import { asTheWorker } from './scans.ts';
 import { against } from './timing.ts';
-
-const languageData = path.join(
-  path.dirname(createRequire(import.meta.url).resolve('@tesseract.js-data/eng/package.json')),
-  '4.0.0_best_int',
-);
 
 /** Reads pages of a demo manual, our way and with the engine's plain default, in turn on the same pictures; in processor time, which other work on the machine disturbs least. */
 export async function benchReading(): Promise<string[]> {
@@ -23,9 +18,7 @@ export async function benchReading(): Promise<string[]> {
     cacheMethod: 'none',
     errorHandler: () => undefined,
   });
-  // As the worker process does.
-  sharp.cache(false);
-  sharp.concurrency(1);
+  asTheWorker();
   let [drawing, ours, plain] = [0, 0, 0];
   const pages = [2, 4, 6, 7];
   const timed = async (work: () => Promise<unknown>): Promise<number> => {

@@ -3,11 +3,11 @@ import os from 'node:os';
 import path from 'node:path';
 import sharp from 'sharp';
 import type { Worker } from 'tesseract.js';
-import { drawPage } from '#server/features/pages/draw.ts';
 import { readPage } from '#server/features/recognition/read.ts';
 import { tablesOf } from '#shared/document/tables.ts';
 import { textOf } from '#shared/document/text-of.ts';
 import { documentOf } from '#shared/reading/structure.ts';
+import { drawScan } from './scans.ts';
 import { editDistance, levelled, shareOf, wordBagError } from './text-score.ts';
 
 /**
@@ -56,15 +56,7 @@ const isNumeric = (cell: string): boolean => /^\$?\d[\d,.]*%?$/.test(cell);
 
 async function readAsProduct(file: string, scratch: string): Promise<Read> {
   const drawn = path.join(scratch, 'drawn.jpg');
-  const { dpi } = await drawPage({
-    path: file,
-    mediaType: `image/${path.extname(file).slice(1)}`,
-    sourcePage: 0,
-    part: null,
-    target: drawn,
-    layerTarget: path.join(scratch, 'layer.json'),
-    mostMegapixels: 120,
-  });
+  const dpi = await drawScan(file, drawn);
   const reading = await readPage({ drawn, dpi, target: path.join(scratch, 'read.jpg'), wish: {} });
   const document = documentOf(reading);
   const cells = tablesOf(document).flatMap(({ rows }) => rows.flat());

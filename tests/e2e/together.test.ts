@@ -146,3 +146,24 @@ describe('two people on one page, while the server is killed and comes back', ()
     expect(done.flatMap(({ kept }) => kept).filter((word) => !words.includes(word))).toEqual([]);
   });
 });
+
+describe('a window that is closed while the server cannot be reached', () => {
+  it('has kept what was typed, and puts it in when the page is next opened', async () => {
+    const { page, context } = await signedIn(browser, url, { email: addressOf('editor'), password });
+    await page.goto(`${url}/pages/${pageId}`);
+    await page.locator('.page-text p').first().click();
+    await server.kill('SIGKILL');
+    await page.getByText('The server cannot be reached.').waitFor();
+    await page.keyboard.type('Typed in the dark. ');
+    await page.close();
+    await server.start();
+    const later = await context.newPage();
+    await later.goto(`${url}/pages/${pageId}`);
+    await later.locator('.page-text').getByText('Typed in the dark.').waitFor();
+    await later.getByText('What you had typed without a connection was put in.').waitFor();
+    await later.keyboard.press('Control+s');
+    await later.getByText('all saved').waitFor();
+    expect((await editor.get(`/api/pages/${pageId}/text`)).text).toContain('Typed in the dark.');
+    await context.close();
+  });
+});

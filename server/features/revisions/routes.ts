@@ -12,6 +12,7 @@ import { existingPage, pageSummary } from '#server/features/pages/index.ts';
 import { offsetOf, pageOfList } from '#server/http/lists.ts';
 import { type ApiRouter, serve, serveRaw } from '#server/http/serve.ts';
 import type { Tools } from '#server/http/tools.ts';
+import { referenceRoutes } from './references.ts';
 import { documentOfPage, documentsOfManual, findRevision, revisionRows } from './queries.ts';
 import { restoreRevision, revisionReply, saveDocument, saveTogether } from './service.ts';
 
@@ -38,6 +39,7 @@ export function revisionRoutes(api: ApiRouter, tools: Tools): void {
   );
   documentRoutes(api, tools);
   partRoutes(api, tools);
+  referenceRoutes(api, tools);
 }
 
 /** What there is to read on a page: the current document, as it is, as text and as tables. */

@@ -10,9 +10,10 @@ const clearShare = 0.985;
  */
 export function hasTwoColumns(picture: GreyPicture, dpi: number): boolean {
   const { width } = picture;
-  const body = bodyRows(picture);
+  const ink = inkOf(picture);
+  const body = bodyRows(picture, ink);
   if (body === null) return false;
-  const clear = clearColumns(picture, body);
+  const clear = clearColumns(width, ink, body);
   const bands = bandsOf(clear, Math.round(narrowestGutterInches * dpi));
   const inner = bands.filter(({ start, end }) => start > width * 0.12 && end < width * 0.88);
   const [gutter] = inner;
@@ -24,9 +25,7 @@ export function hasTwoColumns(picture: GreyPicture, dpi: number): boolean {
 type Band = { start: number; end: number };
 
 /** The rows between the running head and foot: the middle four fifths of what is inked. */
-function bodyRows(picture: GreyPicture): Band | null {
-  const { width, height } = picture;
-  const ink = inkOf(picture);
+function bodyRows({ width, height }: GreyPicture, ink: Uint8Array): Band | null {
   const inked: number[] = [];
   for (let y = 0; y < height; y += 1) {
     let count = 0;
@@ -37,14 +36,13 @@ function bodyRows(picture: GreyPicture): Band | null {
   return first === undefined || last === undefined || last - first < height * 0.2 ? null : { start: first, end: last };
 }
 
-function clearColumns(picture: GreyPicture, { start, end }: Band): boolean[] {
-  const { width } = picture;
-  const ink = inkOf(picture);
-  return Array.from({ length: width }, (_, x) => {
-    let dark = 0;
-    for (let y = start; y < end; y += 1) dark += ink[y * width + x] ?? 0;
-    return dark <= (end - start) * (1 - clearShare);
-  });
+/** Row by row, as the pixels lie: down each column in turn takes three times as long. */
+function clearColumns(width: number, ink: Uint8Array, { start, end }: Band): boolean[] {
+  const dark = new Uint32Array(width);
+  for (let y = start; y < end; y += 1) {
+    for (let x = 0, at = y * width; x < width; x += 1, at += 1) dark[x] = (dark[x] ?? 0) + (ink[at] ?? 0);
+  }
+  return Array.from(dark, (count) => count <= (end - start) * (1 - clearShare));
 }
 
 function bandsOf(clear: boolean[], narrowest: number): Band[] {

@@ -25,6 +25,9 @@ import { ManualDeeds } from '#src/app/manual/manual-deeds.tsx';
 import { ManualUploads } from '#src/app/manual/manual-uploads.tsx';
 
 const PartsSheet = lazy(async () => ({ default: (await import('#src/features/manual/parts-sheet.tsx')).PartsSheet }));
+const ReferencesSheet = lazy(async () => ({
+  default: (await import('#src/features/manual/references-sheet.tsx')).ReferencesSheet,
+}));
 const ValuesSheet = lazy(async () => ({
   default: (await import('#src/features/manual/values-sheet.tsx')).ValuesSheet,
 }));
@@ -89,6 +92,7 @@ function Overview({ manual }: { manual: Manual }) {
           { value: 'pages', label: 'Pages' },
           { value: 'parts', label: 'Parts list' },
           { value: 'values', label: 'Values' },
+          { value: 'references', label: 'References' },
           { value: 'questions', label: <OpenQuestionsLabel manualId={id} /> },
           { value: 'sources', label: 'Sources' },
         ]}
@@ -102,6 +106,9 @@ function Overview({ manual }: { manual: Manual }) {
           </TabSheet>
           <TabSheet value="values">
             <ValuesSheet manualId={id} />
+          </TabSheet>
+          <TabSheet value="references">
+            <ReferencesSheet manualId={id} />
           </TabSheet>
           <TabSheet value="questions">
             <OpenCommentsSheet manualId={id} />

@@ -8,6 +8,7 @@ import { type Proof, proof } from '#shared/calc/proof.ts';
 import type { LookupTable } from '#shared/calc/tables.ts';
 import { type PlanProblem, compilePlan } from '#shared/plan/compile-plan.ts';
 import type { FrequencyPlan } from '#shared/plan/plan.ts';
+import type { Redraws } from './redraws.ts';
 
 /** The quantities of one manual at a setting that is being changed. What is read stays the same object until it changes. */
 export type LiveStore = {
@@ -29,7 +30,10 @@ export type LiveStore = {
   takeSetting: (inputs: InputValues) => void;
   /** The whole manual anew at the present setting, with what is only worked out when asked for. */
   evaluate: (options: EvaluateOptions) => Evaluation;
+  /** Told of every change at once: for the setting itself and what sums it up. */
   subscribe: (listener: () => void) => () => void;
+  /** Told when one value has changed, in turn with the others: for the many values of a page. */
+  follow: (symbol: string, listener: () => void) => () => void;
 };
 
 type Given = {
@@ -41,12 +45,20 @@ type Given = {
   plan?: FrequencyPlan;
   inputs: InputValues;
   onChange: (inputs: InputValues) => void;
+  /** Tells those who follow values; without it, at once. */
+  redraws?: Redraws;
+};
+
+const atOnce: Redraws = {
+  ask: (redraws) => {
+    for (const redraw of redraws) redraw();
+  },
 };
 
 const noPlan: FrequencyPlan = { stages: [] };
 
 export function createLiveStore(given: Given): LiveStore {
-  const { manualId, quantities, tables = [], plan = noPlan, onChange } = given;
+  const { manualId, quantities, tables = [], plan = noPlan, onChange, redraws = atOnce } = given;
   const { program, planProblems } = compiled(quantities, tables, plan);
   const byId = new Map(quantities.map((each) => [each.id, each]));
   const inputs = new Set(quantities.flatMap(({ kind, symbol }) => (kind === 'input' ? [symbol] : [])));
@@ -55,6 +67,7 @@ export function createLiveStore(given: Given): LiveStore {
   const session = createSession(program, setting);
   const home = evaluate(program).values;
   const listeners = new Set<() => void>();
+  const followers = createFollowers(redraws);
   const held = new Map<string, LiveValue | undefined>();
 
   /** What changed is read anew when somebody looks; the inputs themselves always, for a refused one has a reason now. */
@@ -62,6 +75,7 @@ export function createLiveStore(given: Given): LiveStore {
     for (const symbol of symbols) held.delete(symbol);
     onChange(setting);
     listeners.forEach((listener) => listener());
+    followers.tell(symbols);
   };
   const set = (symbol: string, value: number | string): string[] => {
     if (!isInput(symbol)) return [];
@@ -102,6 +116,20 @@ export function createLiveStore(given: Given): LiveStore {
     subscribe: (listener) => {
       listeners.add(listener);
       return () => listeners.delete(listener);
+    },
+    follow: followers.follow,
+  };
+}
+
+/** Who wants to know of which value. */
+function createFollowers(redraws: Redraws): Pick<LiveStore, 'follow'> & { tell: (symbols: readonly string[]) => void } {
+  const bySymbol = new Map<string, Set<() => void>>();
+  return {
+    tell: (symbols) => redraws.ask(symbols.flatMap((symbol) => [...(bySymbol.get(symbol) ?? [])])),
+    follow: (symbol, listener) => {
+      const own = bySymbol.get(symbol) ?? new Set();
+      bySymbol.set(symbol, own.add(listener));
+      return () => own.delete(listener);
     },
   };
 }

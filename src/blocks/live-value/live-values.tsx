@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
-import { createContext, type ReactNode, useContext, useMemo, useState, useSyncExternalStore } from 'react';
+import { createContext, type ReactNode, useCallback, useContext, useMemo, useState, useSyncExternalStore } from 'react';
+import { flushSync } from 'react-dom';
 import type { Quantity } from '#shared/api/quantities.ts';
 import type { LiveValue } from '#shared/calc/describe-value.ts';
 import type { InputValues } from '#shared/calc/evaluate.ts';
@@ -7,6 +8,7 @@ import { channelTablesOfManual, planOfManual } from '#src/api/calculations.ts';
 import { quantitiesOfManual } from '#src/api/quantities.ts';
 import { useStored } from '#src/lib/use-stored.ts';
 import { createLiveStore, type LiveStore } from './live-store.ts';
+import { createRedraws } from './redraws.ts';
 import { readSetting, settingFromAddress, writeSetting } from './setting-storage.ts';
 
 export const valueViews = ['both', 'set', 'printed'] as const;
@@ -46,6 +48,7 @@ export function LiveValues({ manualId, children }: { manualId: string; children:
       plan: stored.plan,
       inputs,
       onChange: (setting) => writeSetting(manualId, setting),
+      redraws: createRedraws({ drawNow: flushSync }),
     });
   }, [manualId, data, tables, stored]);
   const shared = useMemo(() => ({ store, view, setView, units, setUnits }), [store, view, setView, units, setUnits]);
@@ -101,7 +104,12 @@ export type LiveQuantity = { quantity: Quantity; value: LiveValue; store: LiveSt
 export function useLiveValue(quantityId: string): LiveQuantity | null | undefined {
   const store = useLiveStore();
   const quantity = store?.quantity(quantityId);
-  const value = useValue(quantity?.symbol);
+  const symbol = quantity?.symbol;
+  const follow = useCallback(
+    (told: () => void) => (symbol === undefined ? silent() : (store?.follow(symbol, told) ?? silent())),
+    [store, symbol],
+  );
+  const value = useSyncExternalStore(follow, () => (symbol === undefined ? undefined : store?.read(symbol)));
   if (store === null) return undefined;
   return quantity === undefined || value === undefined ? null : { quantity, value, store };
 }

@@ -1,14 +1,16 @@
 import { useQuery } from '@tanstack/react-query';
-import type { ReactNode } from 'react';
+import { type ReactNode, useMemo } from 'react';
 import { Link } from 'react-router';
 import { builtInTables } from '#shared/calc/channel-plans.ts';
 import { type LookupTable, describeKeys } from '#shared/calc/tables.ts';
 import { counted } from '#shared/kit/counted.ts';
+import { formatQuantity } from '#shared/units/format-quantity.ts';
 import { channelTablesOfManual } from '#src/api/calculations.ts';
 import { Failure } from '#src/ui/failure.tsx';
 import { Pending } from '#src/ui/pending.tsx';
 import { RuledTable, Td, Th } from '#src/ui/ruled-table.tsx';
 import { SectionHead } from '#src/ui/screen.tsx';
+import { ruleOfColumn } from './table-rule.ts';
 
 /** The tables that formulas may look into: those tagged on the manual's own pages, and the published plans. */
 export function ChannelTables({ manualId }: { manualId: string }) {
@@ -75,6 +77,7 @@ function OneTable({ table, children }: { table: LookupTable; children?: ReactNod
         <span className="text-pencil">In a formula: </span>
         <code className="figures break-words">{`lookup("${id}", channel, "${first}")`}</code>
       </p>
+      <Rule table={table} />
       <details className="mt-2">
         <summary className="word-link">Its numbers</summary>
         <div className="mt-2 max-h-96 overflow-y-auto">
@@ -94,3 +97,34 @@ function OneTable({ table, children }: { table: LookupTable; children?: ReactNod
     </article>
   );
 }
+
+/** How the channels of the first column of frequencies lie, and which rows do not fit: look for misprints there. */
+function Rule({ table }: { table: LookupTable }) {
+  const column = table.columns.findIndex(({ unit }) => unit !== '');
+  const rule = useMemo(() => ruleOfColumn(table, column), [table, column]);
+  if (rule === undefined) return null;
+  const odd = rule.exceptions.slice(0, oddShown).map(({ channel, hz, rule: by }) => {
+    const printed = formatQuantity(hz / hzPerMhz, 'MHz');
+    return by === null
+      ? `channel ${channel} at ${printed}`
+      : `channel ${channel} at ${printed}, by the rule ${formatQuantity(by / hzPerMhz, 'MHz')}`;
+  });
+  return (
+    <details className="mt-2">
+      <summary className="word-link">The rule behind {table.columns[column]?.name}</summary>
+      <p className="mt-1 max-w-[70ch]">{rule.says}</p>
+      {odd.length === 0 ? null : (
+        <p className="max-w-[70ch] text-pencil">
+          {`Not by the rule: ${odd.join('; ')}${rule.exceptions.length > oddShown ? ' …' : ''}.`}
+        </p>
+      )}
+      <p className="mt-1">
+        <span className="text-pencil">As a formula: </span>
+        <code className="figures break-words">{rule.expression}</code>
+      </p>
+    </details>
+  );
+}
+
+const oddShown = 12;
+const hzPerMhz = 1e6;

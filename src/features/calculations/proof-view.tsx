@@ -1,6 +1,8 @@
 import { Link } from 'react-router';
 import { likeliestCause } from '#shared/calc/proof-cause.ts';
 import type { ProofItem } from '#shared/calc/proof.ts';
+import { provePlan } from '#shared/plan/prove-plan.ts';
+import { symbolOfStage } from '#shared/plan/stage-words.ts';
 import type { LiveStore } from '#src/blocks/live-value/live-store.ts';
 import { useLiveStore } from '#src/blocks/live-value/live-values.tsx';
 import { Empty } from '#src/ui/empty.tsx';
@@ -21,6 +23,9 @@ export function ProofView() {
       </Empty>
     );
   }
+  const stages = new Map(
+    provePlan(store.plan, store.quantities, store.program.tables).map((each) => [symbolOfStage(each.stage), each.says]),
+  );
   const failing = items.filter(({ agrees }) => !agrees);
   const head = (
     <>
@@ -45,24 +50,31 @@ export function ProofView() {
       </p>
       <RuledTable caption="Proof" head={head}>
         {[...failing, ...items.filter(({ agrees }) => agrees)].map((item) => (
-          <ProofRow key={item.symbol} item={item} store={store} />
+          <ProofRow key={item.symbol} item={item} store={store} planSays={stages.get(item.symbol)} />
         ))}
       </RuledTable>
     </section>
   );
 }
 
-function ProofRow({ item, store }: { item: ProofItem; store: LiveStore }) {
+type RowProps = {
+  item: ProofItem;
+  store: LiveStore;
+  /** Of a stage of the frequency plan: whether it follows from the stages before it. */
+  planSays: string | undefined;
+};
+
+function ProofRow({ item, store, planSays }: RowProps) {
   const { symbol, printed, computed } = item;
-  const quantity = store.quantities.find((each) => each.symbol === symbol);
-  const pageId = quantity?.pageId ?? null;
+  const pageId = store.quantities.find((each) => each.symbol === symbol)?.pageId ?? null;
+  const label = store.program.cells[store.program.slots.get(symbol) ?? -1]?.definition.label;
   return (
     <tr>
-      <Td className="min-w-44">{quantity?.label || symbol}</Td>
+      <Td className="min-w-44">{label === undefined || label === '' ? symbol : label}</Td>
       <Td className="figures whitespace-nowrap">{printed}</Td>
       <Td className="figures whitespace-nowrap">{computed === '' ? 'unavailable' : computed}</Td>
       <Td className="max-w-96">
-        <Verdict item={item} store={store} />
+        <Verdict item={item} store={store} planSays={planSays} />
       </Td>
       <Td>
         {pageId === null ? null : (
@@ -75,7 +87,7 @@ function ProofRow({ item, store }: { item: ProofItem; store: LiveStore }) {
   );
 }
 
-function Verdict({ item, store }: { item: ProofItem; store: LiveStore }) {
+function Verdict({ item, store, planSays }: RowProps) {
   if (item.agrees)
     return (
       <StateWord tone="good" shape="tick">
@@ -88,7 +100,7 @@ function Verdict({ item, store }: { item: ProofItem; store: LiveStore }) {
       <StateWord tone="alarm" shape="cross">
         disagrees
       </StateWord>
-      <p>{item.problem?.message ?? likeliestCause(store.program, item)?.says ?? nothingSimple}</p>
+      <p>{item.problem?.message ?? planSays ?? likeliestCause(store.program, item)?.says ?? nothingSimple}</p>
     </>
   );
 }

@@ -33,11 +33,15 @@ export function printedNumber(editor: Editor): PrintedNumber | string {
   return numberIn($from.parent, $from.start(), stretch);
 }
 
+const numberedBlocks = new Set(['heading', 'running', 'caption']);
+
 /** Every printed number with a unit that stands on the page as plain text, in its order. */
 export function numbersOfPage(doc: Node): PrintedNumber[] {
   const numbers: PrintedNumber[] = [];
   doc.descendants((block, position) => {
     if (!block.isTextblock) return true;
+    // "5.3 SECOND I-F" is a heading with a number, no span of time.
+    if (numberedBlocks.has(block.type.name)) return false;
     const line = lineOf(block);
     for (const { start } of quantitiesIn(line)) {
       const stretch = numberAround(line, start);

@@ -10,6 +10,7 @@ import { Empty } from '#src/ui/empty.tsx';
 import { Failure } from '#src/ui/failure.tsx';
 import { Pending } from '#src/ui/pending.tsx';
 import { ToggleGroup } from '#src/ui/toggle-group.tsx';
+import { PageNumbers } from './page-numbers.tsx';
 import { PageTile } from './page-tile.tsx';
 
 type Wanted = 'all' | 'doubts' | 'unread';
@@ -66,6 +67,7 @@ function Strip({ manualId, pages }: { manualId: string; pages: readonly PageSumm
           </Button>
         ) : null}
       </div>
+      {isLabelling ? <PageNumbers manualId={manualId} /> : null}
       {shown.length === 0 ? (
         <Empty
           title="No page is left in this choice"

@@ -48,7 +48,7 @@ export function PageTile({ manualId, page, people, isLabelling }: Props) {
       </Link>
       <div className="mt-2 flex items-baseline justify-between gap-2">
         {isLabelling ? (
-          <PageLabel manualId={manualId} page={page} />
+          <PageLabel key={label} manualId={manualId} page={page} />
         ) : (
           <span className="figures min-w-0 font-semibold break-words">{label}</span>
         )}

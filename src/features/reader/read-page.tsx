@@ -1,7 +1,10 @@
+import { useQuery } from '@tanstack/react-query';
 import { type ReactNode, useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
+import { resolver } from '#shared/document/cross-references.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { imageOf } from '#src/api/pages.ts';
+import { targetsIn } from '#src/api/references.ts';
 import { zoneKey } from '#src/blocks/look.ts';
 import { PageView } from '#src/blocks/page-view.tsx';
 import { PageWaiting, useAttention } from '#src/scan/page-waiting.tsx';
@@ -35,6 +38,8 @@ export function ReadPage({ page, hits, query, notes: given, comments, mayMark }:
     () => ({ imageOf: (zone: Zone) => imageOf(page.id, { zone, v: version }) }),
     [page.id, version],
   );
+  const { data: targets } = useQuery(targetsIn(page.manualId));
+  const resolve = useMemo(() => (targets === undefined ? null : resolver(targets)), [targets]);
   const boxes = useMemo(() => (document === null ? [] : boxesOf(document)), [document]);
   const notes = usePageNotes({ notes: given, text: document, textNow: () => document, link });
   const { boxes: noteBoxes, labelAt } = notes;
@@ -98,7 +103,7 @@ export function ReadPage({ page, hits, query, notes: given, comments, mayMark }:
             {document === null ? (
               <PageWaiting page={page} />
             ) : (
-              <PageView document={document} context={context} query={query} />
+              <PageView document={document} context={context} query={query} resolve={resolve} />
             )}
           </div>
         </div>

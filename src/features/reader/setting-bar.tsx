@@ -1,4 +1,4 @@
-import { useId, useState } from 'react';
+import { useDeferredValue, useId, useMemo, useState } from 'react';
 import {
   unitStyles,
   unitStyleWords,
@@ -35,7 +35,10 @@ function Bar({ manualId, store, startsOpen }: { manualId: string; store: LiveSto
   const [isDetailed, setDetailed] = useState(false);
   const id = useId();
   const inputs = store.quantities.filter(({ kind }) => kind === 'input');
-  const summary = summaryOf(store);
+  // A little behind the typing: it reads every value of the manual.
+  const later = useDeferredValue(setting);
+  // eslint-disable-next-line react-hooks/exhaustive-deps -- what the store reads follows from the setting
+  const summary = useMemo(() => summaryOf(store), [store, later]);
   const isHome = Object.keys(setting).length === 0;
   return (
     <section aria-label="Setting" className="setting-bar">

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { Quantity } from '#shared/api/quantities.ts';
+import type { QuantityDefinition } from '#shared/calc/quantity.ts';
 import { allDependsOn } from '#shared/calc/program.ts';
 import type { Solution } from '#shared/calc/solve.ts';
 import { formatQuantity } from '#shared/units/format-quantity.ts';
@@ -12,9 +13,9 @@ type Props = { store: LiveStore; inputs: readonly Quantity[] };
 
 /** From a value that is to hand, a crystal say, to the input that comes nearest to it. */
 export function WorkBackwards({ store, inputs }: Props) {
-  const held = store.quantities.filter(
-    ({ kind, symbol }) => kind === 'derived' && inputsBehind(store, symbol, inputs).length > 0,
-  );
+  // Those of the manual first, then the stages of its frequency plan: the crystal may be known by either.
+  const all = store.program.cells.map(({ definition }) => definition);
+  const held = all.filter(({ kind, symbol }) => kind === 'derived' && inputsBehind(store, symbol, inputs).length > 0);
   const [symbol, setSymbol] = useState(
     held.find(({ label }) => /crystal/i.test(label))?.symbol ?? held[0]?.symbol ?? '',
   );
@@ -22,7 +23,7 @@ export function WorkBackwards({ store, inputs }: Props) {
   const choices = inputsBehind(store, symbol, inputs);
   const [wished, setWished] = useState('');
   const solveFor = choices.find((each) => each.symbol === wished) ?? choices[0];
-  const quantity = store.quantities.find((each) => each.symbol === symbol);
+  const quantity = held.find((each) => each.symbol === symbol);
   useSetting();
   if (held.length === 0 || quantity === undefined || solveFor === undefined) return null;
   return (
@@ -38,7 +39,7 @@ export function WorkBackwards({ store, inputs }: Props) {
         >
           {held.map((each) => (
             <option key={each.symbol} value={each.symbol}>
-              {each.label}
+              {each.label === '' ? each.symbol : each.label}
             </option>
           ))}
         </Select>
@@ -75,7 +76,7 @@ const inputsBehind = (store: LiveStore, symbol: string, inputs: readonly Quantit
   return inputs.filter((each) => behind.includes(each.symbol));
 };
 
-type FoundProps = { store: LiveStore; quantity: Quantity; solveFor: Quantity; value: string };
+type FoundProps = { store: LiveStore; quantity: QuantityDefinition; solveFor: Quantity; value: string };
 
 function Found({ store, quantity, solveFor, value }: FoundProps) {
   const { pinned, problems } = store.evaluate({ pin: { symbol: quantity.symbol, value, solveFor: solveFor.symbol } });
