@@ -64,19 +64,12 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
     timeoutMs: sideWorkerTimeoutMs,
   });
 
-  const sendMail = createMailer(tools);
-  const publicUrl = config.publicUrl ?? url;
-  const auth = createAuth(tools, {
-    secret: readOrCreateSecret(config.dataDir),
-    publicUrl,
-    trustedOrigins,
-    sendMail,
-  });
+  const mail = { sendMail: createMailer(tools), publicUrl: config.publicUrl ?? url };
+  const auth = createAuth(tools, { secret: readOrCreateSecret(config.dataDir), trustedOrigins, ...mail });
   const clientDir = path.join(projectRoot, 'dist/client');
   const sharedPages = createSharedPages(tools);
   const { presence } = sharedPages;
   const addPages = addPagesBy(announce);
-  const mail = { sendMail, publicUrl };
   const appTools: AppTools = { ...tools, ...mail, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
   const { app, api } = createApp(appTools);
   const socket = coeditingSocket(sharedPages, { findSession: api.findSession, trustedOrigins });

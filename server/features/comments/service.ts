@@ -61,7 +61,12 @@ export function reply(
 export function changeWords(
   tools: CommentTools,
   who: SignedIn,
-  { commentId, kind, words, mentions }: { commentId: string; kind?: CommentKind | undefined; words?: string | undefined; mentions: string[] },
+  {
+    commentId,
+    kind,
+    words,
+    mentions,
+  }: { commentId: string; kind?: CommentKind | undefined; words?: string | undefined; mentions: string[] },
 ): Thread {
   const { row, page } = existing(tools.db, commentId);
   refuseOthers(who, row);
