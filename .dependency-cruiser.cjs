@@ -15,7 +15,18 @@ const sharedModules = [
   'api',
 ];
 const serverLayers = ['config', 'db', 'storage', 'jobs', 'http', 'features'];
-const serverFeatures = ['accounts', 'manuals', 'pages', 'recognition', 'revisions', 'coediting', 'values', 'editions', 'search'];
+const serverFeatures = [
+  'accounts',
+  'manuals',
+  'pages',
+  'recognition',
+  'revisions',
+  'coediting',
+  'comments',
+  'values',
+  'editions',
+  'search',
+];
 const sourceLayers = ['lib', 'ui', 'api', 'blocks', 'scan', 'features', 'app'];
 
 const forbid = (name, from, to) => ({ name, severity: 'error', from, to });

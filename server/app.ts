@@ -6,8 +6,15 @@ import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 import { getHealth } from '#shared/api/health.ts';
 import { AppError } from '#shared/kit/app-error.ts';
-import { type Auth, accountRoutes, hasDemoPeople, sessionFinder } from '#server/features/accounts/index.ts';
+import {
+  type Auth,
+  type SendMail,
+  accountRoutes,
+  hasDemoPeople,
+  sessionFinder,
+} from '#server/features/accounts/index.ts';
 import { type Presence, coeditingRoutes } from '#server/features/coediting/index.ts';
+import { commentRoutes } from '#server/features/comments/index.ts';
 import { editionRoutes } from '#server/features/editions/index.ts';
 import { type AddPages, manualRoutes } from '#server/features/manuals/index.ts';
 import { pageRoutes } from '#server/features/pages/index.ts';
@@ -28,6 +35,9 @@ export type AppTools = Tools & {
   sideWorker: SideWorker;
   addPages: AddPages;
   presence: Presence;
+  sendMail: SendMail;
+  /** The address that people open; links in mails begin with it. */
+  publicUrl: string;
   trustedOrigins: string[];
   clientDir: string;
 };
@@ -69,6 +79,7 @@ function apiRoutes(tools: AppTools): ApiRouter {
   recognitionRoutes(api, tools);
   revisionRoutes(api, tools);
   coeditingRoutes(api, tools);
+  commentRoutes(api, tools);
   valueRoutes(api, tools);
   editionRoutes(api, tools);
   searchRoutes(api, tools);

@@ -64,18 +64,13 @@ export async function startServer(config: Config, worker: WorkerScript): Promise
     timeoutMs: sideWorkerTimeoutMs,
   });
 
-  const sendMail = createMailer(tools);
-  const auth = createAuth(tools, {
-    secret: readOrCreateSecret(config.dataDir),
-    publicUrl: config.publicUrl ?? url,
-    trustedOrigins,
-    sendMail,
-  });
+  const mail = { sendMail: createMailer(tools), publicUrl: config.publicUrl ?? url };
+  const auth = createAuth(tools, { secret: readOrCreateSecret(config.dataDir), trustedOrigins, ...mail });
   const clientDir = path.join(projectRoot, 'dist/client');
   const sharedPages = createSharedPages(tools);
   const { presence } = sharedPages;
   const addPages = addPagesBy(announce);
-  const appTools: AppTools = { ...tools, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
+  const appTools: AppTools = { ...tools, ...mail, auth, sideWorker, addPages, presence, trustedOrigins, clientDir };
   const { app, api } = createApp(appTools);
   const socket = coeditingSocket(sharedPages, { findSession: api.findSession, trustedOrigins });
   server.removeAllListeners('request');

@@ -11,6 +11,7 @@ export const lowestRole = {
   search: 'reader',
   evaluate: 'reader',
   'save-settings': 'technician',
+  comment: 'technician',
   'edit-pages': 'editor',
   'edit-quantities': 'editor',
   'publish-editions': 'editor',

@@ -11,6 +11,7 @@ export const liveEvent = z.discriminatedUnion('type', [
   z.object({ type: z.literal('source'), manualId: id, sourceId: id }),
   z.object({ type: z.literal('quantities'), manualId: id }),
   z.object({ type: z.literal('editions'), manualId: id }),
+  z.object({ type: z.literal('comments'), manualId: id, pageId: id }),
   pagePresence.extend({ type: z.literal('presence'), manualId: id }),
   z.object({ type: z.literal('queue'), waiting: z.number().int(), active: z.number().int() }),
 ]);
@@ -19,7 +20,7 @@ export type LiveEvent = z.infer<typeof liveEvent>;
 export const getEvents = defineEndpoint({
   method: 'get',
   path: '/api/events',
-  summary: 'Server-sent events: page and source states, quantities, editions, presence, the queue',
+  summary: 'Server-sent events: page and source states, quantities, comments, editions, presence, the queue',
   action: 'read-manuals',
   reply: liveEvent,
   replyKind: 'events',

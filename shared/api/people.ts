@@ -32,6 +32,19 @@ export const listPeople = defineEndpoint({
   reply: listOf(person),
 });
 
+/** Enough to mention somebody by, and no more: addresses and roles are for administrators. */
+export const personName = person.pick({ id: true, name: true });
+export type PersonName = z.infer<typeof personName>;
+
+export const listNames = defineEndpoint({
+  method: 'get',
+  path: '/api/people/names',
+  summary: 'The names of everybody who can be mentioned in a comment',
+  action: 'comment',
+  query: listQuery,
+  reply: listOf(personName),
+});
+
 export const invite = z.object({
   name: z.string().trim().min(1, 'Give a name.').max(100),
   email: z.email('Give an e-mail address.'),

@@ -12,7 +12,6 @@ export const openReference = place.extend({
   /** With the words around it. */
   words: z.string(),
 });
-export type OpenReference = z.infer<typeof openReference>;
 
 export const listTargets = defineEndpoint({
   method: 'get',

@@ -1,6 +1,7 @@
 import { QueryClient } from '@tanstack/react-query';
 import { describe, expect, it, vi } from 'vitest';
 import type { PageSummary } from '#shared/api/pages.ts';
+import { commentKeys } from './comment-keys.ts';
 import { applyEvent, queueKey, readEvent } from './live.ts';
 import { pageKeys } from './page-keys.ts';
 
@@ -43,6 +44,14 @@ describe('a live event', () => {
     expect(client.getQueryState(pageKeys.one('p1'))?.isInvalidated).toBe(false);
     applyEvent(client, { type: 'page', manualId: 'm', page: { ...page, revision: 1 } }, vi.fn());
     expect(client.getQueryState(pageKeys.one('p1'))?.isInvalidated).toBe(true);
+  });
+
+  it('marks the comments of its page and of its manual as stale', () => {
+    const client = new QueryClient();
+    const keys = [commentKeys.ofPage('p1'), commentKeys.ofPage('p2'), commentKeys.openIn('m')];
+    for (const key of keys) client.setQueryData(key, []);
+    applyEvent(client, { type: 'comments', manualId: 'm', pageId: 'p1' }, vi.fn());
+    expect(keys.map((key) => client.getQueryState(key)?.isInvalidated)).toEqual([true, false, true]);
   });
 
   it('keeps how long the queue is', () => {

@@ -2,6 +2,7 @@ import type { QueryClient } from '@tanstack/react-query';
 import { type LiveEvent, liveEvent } from '#shared/api/events.ts';
 import type { PageSummary } from '#shared/api/pages.ts';
 import type { PagePresence } from '#shared/api/presence.ts';
+import { commentKeys } from './comment-keys.ts';
 import { editionKeys } from './edition-keys.ts';
 import { manualKeys } from './manuals.ts';
 import { pageKeys } from './page-keys.ts';
@@ -81,6 +82,10 @@ export function applyEvent(client: QueryClient, event: LiveEvent, countsChanged:
       return;
     case 'editions':
       void client.invalidateQueries({ queryKey: editionKeys.ofManual(event.manualId) });
+      return;
+    case 'comments':
+      void client.invalidateQueries({ queryKey: commentKeys.ofPage(event.pageId) });
+      void client.invalidateQueries({ queryKey: commentKeys.openIn(event.manualId) });
       return;
     case 'presence':
       client.setQueryData(presenceKey(event.manualId), (known: PagePresence[] | undefined) =>

@@ -1,5 +1,4 @@
 import { queryOptions } from '@tanstack/react-query';
-import { getPageNumbers } from '#shared/api/page-numbers.ts';
 import { listOpenReferences, listTargets } from '#shared/api/references.ts';
 import { call } from './call.ts';
 import { partKeys } from './part-keys.ts';
@@ -15,10 +14,4 @@ export const openReferencesIn = (manualId: string) =>
   queryOptions({
     queryKey: [...partKeys.ofManual(manualId), 'open-references'],
     queryFn: async ({ signal }) => (await call(listOpenReferences, { params: { manualId }, signal })).items,
-  });
-
-export const pageNumbersIn = (manualId: string) =>
-  queryOptions({
-    queryKey: [...partKeys.ofManual(manualId), 'page-numbers'],
-    queryFn: ({ signal }) => call(getPageNumbers, { params: { manualId }, signal }),
   });

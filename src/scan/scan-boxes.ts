@@ -2,7 +2,7 @@ import type { DocNode, Zone } from '#shared/document/define-block.ts';
 import { allNodes } from '#shared/document/text-of.ts';
 import { zoneKey } from '#src/blocks/look.ts';
 
-export type BoxKind = 'word' | 'block' | 'doubt' | 'live' | 'hit';
+export type BoxKind = 'word' | 'block' | 'doubt' | 'live' | 'hit' | 'note';
 export type ScanBox = { key: string; box: Zone; kind: BoxKind };
 
 /** The zones of a page as boxes for its scan: its blocks, its words, its doubts and its live values. */

@@ -1,7 +1,8 @@
-import { type KeyboardEvent, memo, useEffect, useEffectEvent, useMemo, useRef, useState } from 'react';
+import { type KeyboardEvent, type ReactNode, memo, useEffect, useEffectEvent, useMemo, useRef, useState } from 'react';
 import type { Zone } from '#shared/document/define-block.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Notice } from '#src/ui/notice.tsx';
+import { MarkButton, MarkPlace, useMarking } from './mark-place.tsx';
 import { openScan, type OpenScan, type ScanPlace } from './open-scan.ts';
 import { boxAt, type ScanBox } from './scan-boxes.ts';
 import './scan.css';
@@ -19,21 +20,36 @@ type Props = {
   onPick?: (key: string) => void;
   /** Brought into sight, enlarged, whenever it changes to another. */
   focusBox?: Zone | null;
+  /** Lets a person mark a place of the scan, for a comment. */
+  onMark?: ((zone: Zone) => void) | undefined;
 };
 
 const zoomStep = 1.4;
 const panStep = 0.15;
 
 /** The scan of a page: deep zoom, and the zones of the page drawn over it. */
-export function ScanViewer({ pageId, version, size, label, boxes, active, onHover, onPick, focusBox = null }: Props) {
+export function ScanViewer({
+  pageId,
+  version,
+  size,
+  label,
+  boxes,
+  active,
+  onHover,
+  onPick,
+  focusBox = null,
+  onMark,
+}: Props) {
   const frame = useRef<HTMLDivElement>(null);
   const overlay = useRef<SVGGElement>(null);
   const scan = useRef<OpenScan | null>(null);
+  const marking = useMarking(size, onMark);
   const [isOpen, setOpen] = useState(false);
   const [hasFailed, setFailed] = useState(false);
-  const onMove = useEffectEvent(({ x, y, scale }: ScanPlace) =>
-    overlay.current?.setAttribute('transform', `translate(${x} ${y}) scale(${scale})`),
-  );
+  const onMove = useEffectEvent((now: ScanPlace) => {
+    marking.movedTo(now);
+    overlay.current?.setAttribute('transform', `translate(${now.x} ${now.y}) scale(${now.scale})`);
+  });
   const hover = useEffectEvent((point: { x: number; y: number } | null) =>
     onHover?.(point === null ? null : (boxAt(boxes, point)?.key ?? null)),
   );
@@ -64,7 +80,11 @@ export function ScanViewer({ pageId, version, size, label, boxes, active, onHove
   if (size === null) return <NoPicture />;
   return (
     <section aria-label={label} className="scan">
-      <ScanButtons scan={scan} />
+      <ScanButtons scan={scan}>
+        {onMark === undefined ? null : (
+          <MarkButton isOn={marking.isOn} onPress={() => marking.turn(frame.current?.parentElement)} />
+        )}
+      </ScanButtons>
       {hasFailed ? (
         <Notice kind="doubt" title="Part of this picture could not be fetched.">
           It is tried again when you zoom or come back to the page.
@@ -77,7 +97,9 @@ export function ScanViewer({ pageId, version, size, label, boxes, active, onHove
         // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- a picture that can be moved by keys has to be reachable
         tabIndex={0}
         className="scan-frame"
-        onKeyDown={(event) => onKey(event, scan.current)}
+        onKeyDown={(event) => {
+          if (!marking.onKey(event)) onKey(event, scan.current);
+        }}
       >
         <div ref={frame} className="scan-picture" />
         <svg className="scan-overlay" aria-hidden="true">
@@ -86,34 +108,42 @@ export function ScanViewer({ pageId, version, size, label, boxes, active, onHove
             <ActiveBox boxes={boxes} active={active} />
           </g>
         </svg>
+        {marking.isOn ? <MarkPlace onMark={marking.mark} /> : null}
       </div>
     </section>
   );
 }
 
-function ScanButtons({ scan }: { scan: { current: OpenScan | null } }) {
+function ScanButtons({ scan, children }: { scan: { current: OpenScan | null }; children: ReactNode }) {
   return (
     <div role="group" aria-label="Scan" className="leaf-tools screen-only">
       <Button onClick={() => scan.current?.zoomBy(zoomStep)}>Closer</Button>
       <Button onClick={() => scan.current?.zoomBy(1 / zoomStep)}>Further off</Button>
       <Button onClick={() => scan.current?.fitWidth()}>Fit width</Button>
       <Button onClick={() => scan.current?.fitPage()}>Whole page</Button>
+      {children}
     </div>
   );
 }
 
+/** Drawn around the print instead of over it. */
+const padding: Partial<Record<ScanBox['kind'], number>> = { note: 4 };
+
 const Boxes = memo(function Boxes({ boxes }: { boxes: readonly ScanBox[] }) {
-  return boxes.map(({ key, box: [x, y, width, height], kind }) => (
-    <rect
-      key={`${kind}-${key}`}
-      data-kind={kind}
-      x={x}
-      y={y}
-      width={width}
-      height={height}
-      vectorEffect="non-scaling-stroke"
-    />
-  ));
+  return boxes.map(({ key, box: [x, y, width, height], kind }) => {
+    const pad = padding[kind] ?? 0;
+    return (
+      <rect
+        key={`${kind}-${key}`}
+        data-kind={kind}
+        x={x - pad}
+        y={y - pad}
+        width={width + 2 * pad}
+        height={height + 2 * pad}
+        vectorEffect="non-scaling-stroke"
+      />
+    );
+  });
 });
 
 function ActiveBox({ boxes, active }: { boxes: readonly ScanBox[]; active: string | null }) {

@@ -1,21 +1,27 @@
 import { type KeyboardEvent, useState } from 'react';
-import type { ScanBox } from './scan-boxes.ts';
+import type { BoxKind, ScanBox } from './scan-boxes.ts';
 
 export type SpineTick = {
   key: string;
-  kind: 'block' | 'doubt' | 'live';
+  kind: 'block' | 'doubt' | 'live' | 'note';
   /** In pixels of the page. */ y: number;
   label: string;
 };
 
-const kindWords = { block: 'Block', doubt: 'Doubt', live: 'Live value' } as const;
+const kindWords = { block: 'Block: ', doubt: 'Doubt: ', live: 'Live value: ', note: '' } as const;
+const isTicked = (kind: BoxKind): kind is SpineTick['kind'] => kind in kindWords;
 
-/** One tick for each doubt, live value and block, those of words left out. */
-export const ticksOf = (boxes: readonly ScanBox[], wordsAt: (key: string) => string): SpineTick[] =>
+/** One tick for each comment, doubt, live value and block, those of words left out. */
+export const ticksOf = (boxes: readonly ScanBox[], wordsAt: (key: string, kind: BoxKind) => string): SpineTick[] =>
   boxes
     .flatMap(({ key, box: [, y, , height], kind }): SpineTick[] =>
-      kind === 'block' || kind === 'doubt' || kind === 'live'
-        ? [{ key, kind, y: kind === 'block' ? y : y + height / 2, label: `${kindWords[kind]}: ${wordsAt(key)}` }]
+      isTicked(kind)
+        ? [
+            {
+              ...{ key, kind, y: kind === 'block' ? y : y + height / 2 },
+              label: `${kindWords[kind]}${wordsAt(key, kind)}`,
+            },
+          ]
         : [],
     )
     .sort((a, b) => a.y - b.y);

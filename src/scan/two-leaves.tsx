@@ -10,6 +10,7 @@ type Props = {
   spine: ReactNode;
   page: ReactNode;
   /** Stands beside the page where there is room. */ margin?: ReactNode;
+  /** On a phone the margin belongs to the page; here it is shown beneath the scan as well. */ keepsMargin?: boolean;
 };
 
 const sides = [
@@ -18,7 +19,7 @@ const sides = [
 ] as const;
 
 /** Scan and page side by side with the spine between them. On a phone they are front and back of one sheet. */
-export function TwoLeaves({ scan, spine, page, margin }: Props) {
+export function TwoLeaves({ scan, spine, page, margin, keepsMargin = false }: Props) {
   const isNarrow = useMedia('(width < 768px)');
   const [side, setSide] = useState<Side>('page');
   const shows = (each: Side): boolean => !isNarrow || side === each;
@@ -38,7 +39,7 @@ export function TwoLeaves({ scan, spine, page, margin }: Props) {
           {page}
         </div>
         {margin === undefined ? null : (
-          <aside aria-label="Margin" className="leaf-margin screen-only" hidden={!shows('page')}>
+          <aside aria-label="Margin" className="leaf-margin screen-only" hidden={!keepsMargin && !shows('page')}>
             {margin}
           </aside>
         )}

@@ -1,4 +1,5 @@
 export * from './accounts.ts';
+export * from './comments.ts';
 export * from './editions.ts';
 export * from './jobs.ts';
 export * from './manuals.ts';

@@ -1,5 +1,5 @@
 export { record } from './audit.ts';
 export { type Auth, createAuth, sessionFinder } from './auth.ts';
-export { createMailer } from './mail.ts';
-export { findUserByEmail, hasDemoPeople, hasUsers, roleOfSession } from './queries.ts';
+export { type SendMail, createMailer } from './mail.ts';
+export { findUser, findUserByEmail, hasDemoPeople, hasUsers, roleOfSession } from './queries.ts';
 export { accountRoutes } from './routes.ts';

@@ -1,6 +1,6 @@
 import { and, asc, eq, gt, isNotNull, sql } from 'drizzle-orm';
 import { type Role, role } from '#shared/access/roles.ts';
-import type { Person } from '#shared/api/people.ts';
+import type { Person, PersonName } from '#shared/api/people.ts';
 import { account, session, user } from '#server/db/schema/index.ts';
 import type { Connection } from '#server/jobs/events.ts';
 
@@ -24,6 +24,17 @@ export const personOf = (db: Connection, row: UserRow): Person => ({
 
 export const userRows = (db: Connection, limit: number, offset: number): UserRow[] =>
   db.select().from(user).orderBy(asc(user.name)).limit(limit).offset(offset).all();
+
+/** Those who are barred get no mail, so they are left out. */
+export const nameRows = (db: Connection, limit: number, offset: number): PersonName[] =>
+  db
+    .select({ id: user.id, name: user.name })
+    .from(user)
+    .where(sql`coalesce(${user.banned}, 0) = 0`)
+    .orderBy(asc(user.name))
+    .limit(limit)
+    .offset(offset)
+    .all();
 
 export const findUser = (db: Connection, id: string): UserRow | undefined =>
   db.select().from(user).where(eq(user.id, id)).get();

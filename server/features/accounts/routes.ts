@@ -7,7 +7,7 @@ import type { Tools } from '#server/http/tools.ts';
 import { auditRows } from './audit.ts';
 import type { Auth } from './auth.ts';
 import { outboxRows } from './mail.ts';
-import { personOf, userRows } from './queries.ts';
+import { nameRows, personOf, userRows } from './queries.ts';
 import { changePerson, inviteAgain, invitePerson } from './service.ts';
 
 export function accountRoutes(api: ApiRouter, tools: Tools & { auth: Auth }): void {
@@ -19,6 +19,7 @@ export function accountRoutes(api: ApiRouter, tools: Tools & { auth: Auth }): vo
       query,
     ),
   );
+  serve(api, peopleApi.listNames, ({ query }) => pageOfList(nameRows(db, query.limit + 1, offsetOf(query)), query));
   serve(api, peopleApi.invitePerson, ({ user, body }) => invitePerson(tools, user, body));
   serve(api, peopleApi.updatePerson, ({ user, params, body }) =>
     changePerson(tools, user, { ...params, change: body }),

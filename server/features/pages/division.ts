@@ -3,6 +3,7 @@ import { and, eq, gt, sql } from 'drizzle-orm';
 import type { PageSummary } from '#shared/api/pages.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import {
+  comments,
   jobs,
   lessons,
   pages,
@@ -111,6 +112,7 @@ function removePage(tx: Connection, { id }: PageRow, heirId: string): void {
   tx.delete(jobs).where(eq(jobs.subjectId, id)).run();
   tx.delete(searchEntries).where(eq(searchEntries.pageId, id)).run();
   tx.delete(searchQuantities).where(eq(searchQuantities.pageId, id)).run();
+  tx.delete(comments).where(eq(comments.pageId, id)).run();
   tx.delete(lessons).where(eq(lessons.pageId, id)).run();
   tx.delete(sharedEdits).where(eq(sharedEdits.pageId, id)).run();
   tx.delete(sharedTexts).where(eq(sharedTexts.pageId, id)).run();

@@ -8,6 +8,7 @@ import type { LightStep } from '#server/jobs/runner.ts';
 import type { Tools } from '#server/http/tools.ts';
 import { type RevisionRow, currentDocument, findReading, findRevision, isTouchedByPeople } from './queries.ts';
 import { habitsOfManual, machineDocument } from './learning.ts';
+import { moveAnchors } from './move-anchors.ts';
 import { addRevision, onCurrentPicture, saveSharedText } from './service.ts';
 
 /**
@@ -28,6 +29,7 @@ export const structureStep = (tools: Tools): LightStep => ({
     const change = { readingId: reading.id, imageKey, width, height, confidence, warnings, problem: null };
     const current = page.revision === 0 ? undefined : findRevision(db, page.id, page.revision);
     const isTheirs = isTouchedByPeople(db, page.id);
+    moveAnchors(db, page, content.transform);
     changePage(db, page.id, isTheirs ? change : { ...change, state: 'read' });
     const now = { ...page, ...change, ...(isTheirs ? {} : { state: 'read' as const }) };
     const { document, note } =

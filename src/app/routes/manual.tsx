@@ -5,6 +5,7 @@ import type { Manual } from '#shared/api/manuals.ts';
 import { AppError } from '#shared/kit/app-error.ts';
 import { oneManual } from '#src/api/manuals.ts';
 import { useCan } from '#src/api/session.ts';
+import { OpenCommentsSheet, OpenQuestionsLabel } from '#src/features/comments/open-comments-sheet.tsx';
 import { ReadingState } from '#src/features/library/reading-state.tsx';
 import { OverviewTitle } from '#src/features/manual/overview-title.tsx';
 import { PageStrip } from '#src/features/manual/page-strip.tsx';
@@ -92,6 +93,7 @@ function Overview({ manual }: { manual: Manual }) {
           { value: 'parts', label: 'Parts list' },
           { value: 'values', label: 'Values' },
           { value: 'references', label: 'References' },
+          { value: 'questions', label: <OpenQuestionsLabel manualId={id} /> },
           { value: 'sources', label: 'Sources' },
         ]}
       >
@@ -107,6 +109,9 @@ function Overview({ manual }: { manual: Manual }) {
           </TabSheet>
           <TabSheet value="references">
             <ReferencesSheet manualId={id} />
+          </TabSheet>
+          <TabSheet value="questions">
+            <OpenCommentsSheet manualId={id} />
           </TabSheet>
           <TabSheet value="sources">
             <SourcesSheet manualId={id} pickFiles={picker('plain')} />

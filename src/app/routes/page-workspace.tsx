@@ -1,10 +1,12 @@
 import { useQuery } from '@tanstack/react-query';
-import { Link, Navigate, useParams } from 'react-router';
+import { Link, Navigate, useParams, useSearchParams } from 'react-router';
 import { can } from '#shared/access/roles.ts';
 import type { Page } from '#shared/api/pages.ts';
 import { onePage } from '#src/api/pages.ts';
 import { me, useCan } from '#src/api/session.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
+import { CommentsPanel } from '#src/features/comments/comments-panel.tsx';
+import { useNotesOfPage } from '#src/features/comments/use-notes-of-page.ts';
 import { Workspace } from '#src/features/editor/workspace.tsx';
 import { HistoryButton } from '#src/features/history/history-button.tsx';
 import { PageWarnings } from '#src/features/reading/page-warnings.tsx';
@@ -38,10 +40,16 @@ export function Component() {
 
 function Correcting({ page }: { page: Page }) {
   const mayRead = useCan('run-recognition');
+  const notes = useNotesOfPage(page.id);
+  const [asked] = useSearchParams();
   return (
     <LiveValues manualId={page.manualId}>
       <Workspace
         page={page}
+        notes={notes}
+        comments={(places) => (
+          <CommentsPanel page={page} notes={places} asked={asked.get('comment')} hasButton={false} />
+        )}
         addressOf={(id) => `/pages/${id}`}
         settingBar={
           <>

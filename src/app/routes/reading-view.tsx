@@ -8,6 +8,8 @@ import { oneEdition, pageOfEdition } from '#src/api/editions.ts';
 import { onePage } from '#src/api/pages.ts';
 import { useCan } from '#src/api/session.ts';
 import { LiveValues } from '#src/blocks/live-value/live-values.tsx';
+import { CommentsPanel } from '#src/features/comments/comments-panel.tsx';
+import { useNotesOfPage } from '#src/features/comments/use-notes-of-page.ts';
 import { editionCell } from '#src/features/editions/edition-words.ts';
 import { ReadingChoice } from '#src/features/editions/reading-choice.tsx';
 import { useChangeBars } from '#src/features/editions/use-change-bars.ts';
@@ -61,6 +63,9 @@ function Reading({ page, shown, isMissing }: { page: Page; shown: Shown; isMissi
   const edition = isMissing ? null : shown.edition;
   const { bars, ...barSwitch } = useChangeBars(page, shown.before);
   const kept = asked.get('edition') === null || shown.edition === null ? '' : `?edition=${shown.edition.number}`;
+  const mayComment = useCan('comment');
+  const notes = useNotesOfPage(page.id);
+  const hasMargin = mayComment || notes.length > 0;
   return (
     <LiveValues manualId={page.manualId} edition={edition?.number ?? null}>
       <div className="desk">
@@ -75,7 +80,16 @@ function Reading({ page, shown, isMissing }: { page: Page; shown: Shown; isMissi
         </PageTitle>
         <ReadingChoice manualId={page.manualId} shown={shown} isMissing={isMissing} bars={barSwitch} />
         <SettingBar manualId={page.manualId} startsOpen />
-        <ReadPage page={page} hits={hits} query={asked.get('q') ?? ''} bars={bars} />
+        <ReadPage
+          {...{ page, hits, notes, bars }}
+          query={asked.get('q') ?? ''}
+          mayMark={mayComment}
+          comments={
+            hasMargin
+              ? (places) => <CommentsPanel page={page} notes={places} asked={asked.get('comment')} hasButton />
+              : null
+          }
+        />
       </div>
     </LiveValues>
   );

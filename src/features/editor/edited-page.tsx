@@ -11,6 +11,7 @@ import { ScanViewer } from '#src/scan/scan-viewer.tsx';
 import { Spine, ticksOf } from '#src/scan/spine.tsx';
 import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import type { PageLink } from '#src/scan/use-page-link.ts';
+import { type PageNote, type PageNotes, usePageNotes } from '#src/scan/use-page-notes.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 import { doubtsOf } from './doubts.ts';
 import { DoubtStrip } from './doubt-strip.tsx';
@@ -42,11 +43,14 @@ type Props = {
   link: PageLink;
   scan: { pageId: string; version: string; size: { width: number; height: number } | null; label: string };
   settingBar: ReactNode;
+  /** Comments of the page, and how they are shown in the margin. */
+  notes: readonly PageNote[];
+  comments: (notes: PageNotes) => ReactNode;
   links: (isDirty: boolean) => ReactNode;
   addressOf: (pageId: string) => string;
 };
 
-export function EditedPage({ page, shared, name, context, link, scan, settingBar, links, addressOf }: Props) {
+export function EditedPage({ page, shared, name, context, link, scan, settingBar, links, addressOf, ...slots }: Props) {
   const editor = usePageEditor({ shared, context, name, label: 'Page text' });
   const saving = useSaving(editor, page, shared);
   const others = useOthers(shared.provider);
@@ -57,7 +61,9 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
   const [areNumbersOpen, setNumbersOpen] = useState(false);
   const [places, setPlaces] = useState<readonly ZonePlace[] | null>(null);
   const { boxes, shown, doubtCount } = usePlaces(editor);
-  const goTo = useGoTo(editor, link);
+  const textNow = (): DocNode => editor.getJSON() as DocNode;
+  const notes = usePageNotes({ ...{ notes: slots.notes, text: shown, link }, textNow });
+  const goTo = useGoTo(editor, link, notes.openAt);
   useCaretLight(editor, link.setActive);
   const save = async (): Promise<void> => {
     if (!saving.isDirty) toast('Nothing has changed since the last revision.');
@@ -69,12 +75,14 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
     settle: walk.settle,
     live: () => setLive(printedNumber(editor)),
     readAgain: () => setPlaces(zonePlaces(editor)),
+    comment: notes.begin,
     save: () => void save(),
     help: () => setKeysOpen(true),
   };
   useKeys(deeds);
-  const onScan = { boxes, active: link.active, onHover: link.setActive, focusBox: link.focusBox };
-  const ticks = ticksOf(boxes, (key) => wordsAt(shown, key));
+  const all = useMemo(() => [...notes.boxes, ...boxes], [notes.boxes, boxes]);
+  const onScan = { boxes: all, active: link.active, onHover: link.setActive, focusBox: link.focusBox };
+  const ticks = ticksOf(all, (key, kind) => (kind === 'note' ? notes.labelAt(key) : wordsAt(shown, key)));
   return (
     <div className="desk">
       <PageTitle page={page} doubts={doubtCount} addressOf={addressOf}>
@@ -83,7 +91,8 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
       {settingBar}
       <PageNotices standing={shared.standing} />
       <TwoLeaves
-        scan={<ScanViewer {...scan} {...onScan} onPick={(key) => goTo(key, 'text')} />}
+        keepsMargin={notes.draft !== null || notes.opened !== null}
+        scan={<ScanViewer {...scan} {...onScan} onPick={(key) => goTo(key, 'text')} onMark={notes.beginAt} />}
         spine={
           <Spine
             ticks={ticks}
@@ -101,6 +110,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
               onMakeLive={deeds.live}
               onNumbers={() => setNumbersOpen(true)}
               onReadAgain={deeds.readAgain}
+              onComment={notes.begin}
             />
             <h2 className="sr-only">Page text</h2>
             <div ref={link.leaf} className="leaf-scroll" onPointerOver={link.onTextHover}>
@@ -119,6 +129,7 @@ export function EditedPage({ page, shared, name, context, link, scan, settingBar
             )}
             <DoubtStrip editor={editor} walk={walk} onKeys={deeds.help} />
             <PartStrip editor={editor} />
+            {slots.comments(notes)}
           </>
         }
       />
@@ -131,13 +142,19 @@ const keyOfPlaces = (places: readonly ZonePlace[]): string => places.map(({ zone
 const keyOf = (live: PrintedNumber | string): string => (typeof live === 'string' ? live : String(live.from));
 
 /** To the text of a zone, with the caret in it, and if wished to its place on the scan. */
-function useGoTo(editor: Editor, { showOnScan, showInText }: PageLink): (key: string, side: 'both' | 'text') => void {
+function useGoTo(
+  editor: Editor,
+  { showOnScan, showInText }: PageLink,
+  openNote: (key: string) => void,
+): (key: string, side: 'both' | 'text') => void {
   return (key, side) => {
     if (side === 'both') showOnScan(key);
     showInText(key);
     const position = positionOfZone(editor.state.doc, key);
-    if (position === undefined) return;
-    editor.chain().focus(undefined, { scrollIntoView: false }).setTextSelection(position).run();
+    if (position !== undefined)
+      editor.chain().focus(undefined, { scrollIntoView: false }).setTextSelection(position).run();
+    // Last: a comment that begins there takes the focus.
+    openNote(key);
   };
 }
 

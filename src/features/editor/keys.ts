@@ -1,5 +1,5 @@
 /** The keys of the workspace, each once: what is listed in the help is what is obeyed. `code` is the place on the keyboard. */
-export type DeedName = 'next' | 'previous' | 'settle' | 'save' | 'live' | 'readAgain' | 'help';
+export type DeedName = 'next' | 'previous' | 'settle' | 'save' | 'live' | 'readAgain' | 'comment' | 'help';
 type Key = {
   name: DeedName;
   shown: string;
@@ -23,6 +23,13 @@ export const deedKeys: readonly Key[] = [
     ctrl: true,
   },
   { name: 'readAgain', shown: 'Alt R', says: 'read the block or cell at the caret again', code: 'KeyR', alt: true },
+  {
+    name: 'comment',
+    shown: 'Alt C',
+    says: 'comment on the chosen words, or on those at the caret',
+    code: 'KeyC',
+    alt: true,
+  },
   { name: 'save', shown: 'Ctrl S', says: 'save a revision', code: 'KeyS', ctrl: true },
   { name: 'help', shown: '?', says: 'these keys, while nothing is being typed', code: '?', isPlain: true },
 ];

@@ -5,7 +5,7 @@ import { tableKinds } from '#shared/document/blocks/table.ts';
 import { tableWords } from '#src/blocks/trade-words.ts';
 import { Button } from '#src/ui/button.tsx';
 import { inputLook } from '#src/ui/field.tsx';
-import { keepCaret } from './keep-caret.ts';
+import { keepCaret } from '#src/lib/keep-caret.ts';
 import { addColumn, deleteColumn, setTableKind, tablePlace } from './table-edits.ts';
 import { TableImportDialog } from './table-import-dialog.tsx';
 import { tableAsCsv } from './table-transfer.ts';

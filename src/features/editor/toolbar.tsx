@@ -4,13 +4,19 @@ import type { ReactNode } from 'react';
 import { Button } from '#src/ui/button.tsx';
 import { inputLook } from '#src/ui/field.tsx';
 import { type BlockChoice, blockChoices, choiceAt, chooseBlock } from './block-kinds.ts';
-import { keepCaret } from './keep-caret.ts';
+import { keepCaret } from '#src/lib/keep-caret.ts';
 import { TableTools } from './table-tools.tsx';
 
-type Props = { editor: Editor; onMakeLive: () => void; onNumbers: () => void; onReadAgain: () => void };
+type Props = {
+  editor: Editor;
+  onMakeLive: () => void;
+  onNumbers: () => void;
+  onReadAgain: () => void;
+  onComment: () => void;
+};
 
 /** What can be done with the text, in words. Tools for tables appear when the caret is in one. */
-export function Toolbar({ editor, onMakeLive, onNumbers, onReadAgain }: Props) {
+export function Toolbar({ editor, onMakeLive, onNumbers, onReadAgain, onComment }: Props) {
   const state = useEditorState({
     editor,
     selector: ({ editor: now }) => ({
@@ -63,6 +69,9 @@ export function Toolbar({ editor, onMakeLive, onNumbers, onReadAgain }: Props) {
       </Button>
       <Button onMouseDown={keepCaret} onClick={onReadAgain}>
         Read again
+      </Button>
+      <Button onMouseDown={keepCaret} onClick={onComment}>
+        Comment
       </Button>
       {state.isTable ? <TableTools editor={editor} kind={state.tableKind} /> : null}
     </div>

@@ -2,7 +2,7 @@ import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { counted } from '#shared/kit/counted.ts';
 import { relabelPage } from '#src/api/pages.ts';
-import { pageNumbersIn } from '#src/api/references.ts';
+import { pageNumbersIn } from '#src/api/page-numbers.ts';
 import { saidBy } from '#src/lib/said-by.ts';
 import { Button } from '#src/ui/button.tsx';
 import { toast } from '#src/ui/toast.ts';

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useMemo } from 'react';
+import { type ReactNode, useMemo } from 'react';
 import type { Page } from '#shared/api/pages.ts';
 import { resolver } from '#shared/document/cross-references.ts';
 import type { DocNode, Zone } from '#shared/document/define-block.ts';
@@ -14,17 +14,24 @@ import { ScanViewer } from '#src/scan/scan-viewer.tsx';
 import { Spine, ticksOf } from '#src/scan/spine.tsx';
 import { TwoLeaves } from '#src/scan/two-leaves.tsx';
 import { usePageLink } from '#src/scan/use-page-link.ts';
+import { type PageNote, type PageNotes, usePageNotes } from '#src/scan/use-page-notes.ts';
 import { wordsAt } from '#src/scan/words-at.ts';
 
 type Props = {
   page: Page;
-  /** Hits of a search, outlined on the scan. */ hits: readonly Zone[];
+  /** Hits of a search, outlined on the scan. */
+  hits: readonly Zone[];
   query: string;
+  /** Comments of the page. */
+  notes: readonly PageNote[];
+  /** How they are shown in the margin; null leaves the margin out. */
+  comments: ((notes: PageNotes) => ReactNode) | null;
+  mayMark: boolean;
   bars?: ChangeBars | null;
 };
 
 /** A page that is read: its text beside its scan, each showing where the other stands. */
-export function ReadPage({ page, hits, query, bars = null }: Props) {
+export function ReadPage({ page, hits, query, notes: given, comments, mayMark, bars = null }: Props) {
   useAttention(page);
   const version = page.imageVersion ?? '';
   const document = page.document as DocNode | null;
@@ -36,17 +43,24 @@ export function ReadPage({ page, hits, query, bars = null }: Props) {
   const { data: targets } = useQuery(targetsIn(page.manualId));
   const resolve = useMemo(() => (targets === undefined ? null : resolver(targets)), [targets]);
   const boxes = useMemo(() => (document === null ? [] : boxesOf(document)), [document]);
+  const notes = usePageNotes({ notes: given, text: document, textNow: () => document, link });
+  const { boxes: noteBoxes, labelAt } = notes;
   const shown = useMemo(
-    () => [...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
-    [boxes, hits],
+    () => [...noteBoxes, ...boxes, ...hits.map((box): ScanBox => ({ key: zoneKey(box), box, kind: 'hit' }))],
+    [noteBoxes, boxes, hits],
   );
-  const ticks = useMemo(() => ticksOf(boxes, (key) => wordsAt(document, key)), [boxes, document]);
+  const ticks = useMemo(
+    () => ticksOf([...noteBoxes, ...boxes], (key, kind) => (kind === 'note' ? labelAt(key) : wordsAt(document, key))),
+    [noteBoxes, boxes, labelAt, document],
+  );
   const size =
     page.imageVersion !== null && page.width !== null && page.height !== null
       ? { width: page.width, height: page.height }
       : null;
   return (
     <TwoLeaves
+      keepsMargin={notes.draft !== null || notes.opened !== null}
+      margin={comments?.(notes)}
       scan={
         <ScanViewer
           pageId={page.id}
@@ -56,7 +70,11 @@ export function ReadPage({ page, hits, query, bars = null }: Props) {
           boxes={shown}
           active={link.active}
           onHover={link.setActive}
-          onPick={(key) => void link.showInText(key)}
+          onPick={(key) => {
+            link.showInText(key);
+            notes.openAt(key);
+          }}
+          onMark={mayMark ? notes.beginAt : undefined}
           focusBox={link.focusBox}
         />
       }
@@ -65,7 +83,10 @@ export function ReadPage({ page, hits, query, bars = null }: Props) {
           ticks={ticks}
           height={page.height}
           active={link.active}
-          onGo={(key) => void link.goTo(key)}
+          onGo={(key) => {
+            link.goTo(key);
+            notes.openAt(key);
+          }}
           onHover={link.setActive}
         />
       }
