@@ -11,6 +11,8 @@ export const chainSources = {
   friis1: 'Calculator site worked example: LNA 1.5 dB/20 dB, mixer 10 dB/15 dB, IF 15 dB -> 1.80 dB',
   friis2: 'Tutorial worked example: filter, LNA, filter, mixer -> F 2.414, 3.83 dB; sensitivity -101.2 dBm',
   oldradios: 'oldradios.co.za "Superhet tracking - padder and trimmer"',
+  vk3bhr:
+    'VK3BHR, "Superheterodyne oscillator tracking" (exact at three points); F. Langford-Smith, Radiotron Designer\'s Handbook, 4th ed., ch. 25; values computed from the resonance law',
   'usb-pairs':
     'Public compilation of Unified S-Band parameters: 2106.40625 up / 2287.5 down; 2101.802 up / 2282.5 down',
   ulysses:
@@ -138,4 +140,7 @@ export const chainCases: readonly ChainCase[] = [
   published('C72: Wavelength at 14.1 MHz', { expression: '299792458/f', given: { f: 14100000 } }, { expected: 21.261876453900708, tolerance: 2.22619e-11, unit: 'm', source: 'si', standing: 'derived' }),
   published('C73: Second-order sum of 7.0 and 7.1 MHz', { expression: 'abs(m*a+n*b)', given: { m: 1, n: 1, a: 7000000, b: 7100000 } }, { expected: 14100000.0, tolerance: 0.5, unit: 'Hz', source: 'nemb', standing: 'derived' }),
   published('C74: Third-order 2 f1 - f2', { expression: '2*f1-f2', given: { f1: 146610000, f2: 146520000 } }, { expected: 146700000.0, tolerance: 0.5, unit: 'Hz', source: 'ncvec4', standing: 'derived' }),
+  published('Tracking: the oscillator of a superheterodyne at 600 kHz, 455 kHz above the signal by padder and trimmer', { expression: '1/(2*pi*sqrt(Lo*Cp*(G+T)/(Cp+G+T)))', given: { Lo: 0.0001248281028515008, Cp: 4.041450499068353e-10, T: 4.289709030703591e-11, G: 2.892575553031448e-10 } }, { expected: 1055000.0, tolerance: 0.5, unit: 'Hz', source: 'vk3bhr', standing: 'derived' }),
+  published('Tracking: the oscillator of a superheterodyne at 1000 kHz, 455 kHz above the signal by padder and trimmer', { expression: '1/(2*pi*sqrt(Lo*Cp*(G+T)/(Cp+G+T)))', given: { Lo: 0.0001248281028515008, Cp: 4.041450499068353e-10, T: 4.289709030703591e-11, G: 8.275671990913212e-11 } }, { expected: 1455000.0, tolerance: 0.5, unit: 'Hz', source: 'vk3bhr', standing: 'derived' }),
+  published('Tracking: the oscillator of a superheterodyne at 1500 kHz, 455 kHz above the signal by padder and trimmer', { expression: '1/(2*pi*sqrt(Lo*Cp*(G+T)/(Cp+G+T)))', given: { Lo: 0.0001248281028515008, Cp: 4.041450499068353e-10, T: 4.289709030703591e-11, G: 1.8225208848503168e-11 } }, { expected: 1955000.0, tolerance: 0.5, unit: 'Hz', source: 'vk3bhr', standing: 'derived' }),
 ];

@@ -14,6 +14,7 @@ export const channelSources = {
   nwr: 'NOAA Weather Radio channel list in an open-source radio programming project (WX1-WX7)',
   marine_fr:
     'French marine VHF channel list in an open-source radio programming project (57 channels, ship/coast by 4.6 MHz offset)',
+  cfr97_303h: '47 CFR 97.303(h), 60 m channels; the centre frequencies agree with a read channel list',
   marine_mfr: 'Radio maker user guide appendix "VHF Marine Channel List" (channels 1-23, transmit and receive)',
   aim_ils: 'FAA Aeronautical Information Manual, Table 1-1-4 "Frequency Pairs Allocated for ILS" (20 Apr 2023 edition)',
   tacan_forum: 'Professional pilots forum thread "Formulae Tacan channel to VOR frequency", March 2003',
@@ -153,5 +154,11 @@ export const channelCases: readonly ChannelCase[] = [
   ]),
   ...published({ table: 'deep-space', column: 'X down', unit: 'MHz', tolerance: 3e-06, source: 'dsn810', standing: 'memory' }, [
     [3, 8400.061729],
+  ]),
+  ...published({ table: 'us-60m', column: 'centre', unit: 'kHz', tolerance: 1e-09, source: 'cfr97_303h', standing: 'secondary' }, [
+    [1, 5332], [2, 5348], [3, 5358.5], [4, 5373], [5, 5405],
+  ]),
+  ...published({ table: 'us-60m', column: 'dial', unit: 'kHz', tolerance: 1e-09, source: 'cfr97_303h', standing: 'secondary' }, [
+    [1, 5330.5], [2, 5346.5], [3, 5357], [4, 5371.5], [5, 5403.5],
   ]),
 ];

@@ -1,7 +1,14 @@
 import { aeronauticalVhf, distanceX, distanceY, instrumentLanding } from './plans/aeronautical.ts';
 import { fmBroadcast, television } from './plans/broadcast.ts';
 import { maritimeVhf } from './plans/maritime.ts';
-import { citizensBand, familyRadio, generalMobileRepeaters, multiUse, weatherRadio } from './plans/personal-radio.ts';
+import {
+  amateurSixtyMetres,
+  citizensBand,
+  familyRadio,
+  generalMobileRepeaters,
+  multiUse,
+  weatherRadio,
+} from './plans/personal-radio.ts';
 import { deepSpace, turnaround } from './plans/spacecraft.ts';
 import { standardIfs, timeStations } from './plans/standards.ts';
 import type { LookupTable } from './tables.ts';
@@ -14,6 +21,7 @@ export const builtInTables: readonly LookupTable[] = [
   generalMobileRepeaters,
   multiUse,
   weatherRadio,
+  amateurSixtyMetres,
   fmBroadcast,
   television,
   aeronauticalVhf,

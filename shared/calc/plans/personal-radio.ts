@@ -92,3 +92,19 @@ export const weatherRadio = lazyTable(
   },
   () => weatherKhz.map((khz, at) => [at + 1, khz / 1000]),
 );
+
+/** Dial settings are for upper sideband, 1.5 kHz below the middle of the channel. */
+const dialBelowCentreKhz = 1.5;
+export const amateurSixtyMetres = lazyTable(
+  {
+    id: 'us-60m',
+    title: 'US amateur 60 m channels',
+    source: '47 CFR 97.303(h), from memory; the centre frequencies agree with a published list',
+    key: channel,
+    columns: [
+      { name: 'centre', unit: 'kHz' },
+      { name: 'dial', unit: 'kHz' },
+    ],
+  },
+  () => [5332, 5348, 5358.5, 5373, 5405].map((centre, at) => [at + 1, centre, centre - dialBelowCentreKhz]),
+);
