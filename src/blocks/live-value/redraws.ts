@@ -1,6 +1,6 @@
 /** Of a frame of 16 ms, what redrawing may take; the rest is for the typing that goes on, and for layout. */
-const sliceMs = 6;
-const atOnce = 8;
+const sliceMs = 4;
+const atOnce = 4;
 
 export type Redraws = { ask: (redraws: Iterable<() => void>) => void };
 

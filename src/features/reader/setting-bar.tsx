@@ -1,4 +1,4 @@
-import { useDeferredValue, useId, useMemo, useState } from 'react';
+import { useEffect, useId, useMemo, useState } from 'react';
 import {
   unitStyles,
   unitStyleWords,
@@ -35,8 +35,8 @@ function Bar({ manualId, store, startsOpen }: { manualId: string; store: LiveSto
   const [isDetailed, setDetailed] = useState(false);
   const id = useId();
   const inputs = store.quantities.filter(({ kind }) => kind === 'input');
-  // A little behind the typing: it reads every value of the manual.
-  const later = useDeferredValue(setting);
+  // Once the typing rests: it reads every value of the manual.
+  const later = useRested(setting);
   // eslint-disable-next-line react-hooks/exhaustive-deps -- what the store reads follows from the setting
   const summary = useMemo(() => summaryOf(store), [store, later]);
   const isHome = Object.keys(setting).length === 0;
@@ -138,4 +138,17 @@ function ValueViewChoice() {
       />
     </>
   );
+}
+
+/** Longer than between two keys of somebody who types a number, shorter than anybody waits for. */
+const restMs = 150;
+
+/** A value as it was when it last stood still for a moment. */
+function useRested<T>(value: T): T {
+  const [rested, setRested] = useState(value);
+  useEffect(() => {
+    const timer = setTimeout(() => setRested(value), restMs);
+    return () => clearTimeout(timer);
+  }, [value]);
+  return rested;
 }
