@@ -33,8 +33,9 @@ beforeAll(async () => {
   );
   await editor.put(`/api/pages/${pageId}/document`, { baseRevision: 0, document: doc(...lines, partsTable()) });
   const made = await editor.post(`/api/manuals/${manualId}/quantities`, {
-    ...{ symbol: 'channel', label: 'Channel', kind: 'input', unit: '1', home: 12, printed: { text: '12' } },
+    ...{ symbol: 'channel', label: 'Channel', kind: 'input', unit: '', home: 12, printed: { text: '12' } },
   });
+  expect(made.status).toBe(201);
   quantity = made.body.id as string;
   browser = await openBrowser();
 });
@@ -137,6 +138,7 @@ describe('two people on one page, while the server is killed and comes back', ()
     expect(await seriousFindings(pages[0]!)).toEqual([]);
     await keepPicture(pages[0]!, 'together');
 
+    expect(one).toContain('"liveValue"');
     // What the windows show is what the server keeps, and who wrote it.
     await pages[0]!.keyboard.press('Control+s');
     await pages[0]!.getByText('all saved').waitFor();
